@@ -1,0 +1,152 @@
+package org.hullsum.expression;
+
+import java.util.List;
+import java.util.Objects;
+import java.util.Optional;
+import org.hullsum.units.Dimension;
+
+/**
+ * A formula as an immutable tree. Numbers in it are in working units; conditions are expressions
+ * with value 1 (true) or 0 (false). Equality is by structure.
+ */
+public sealed interface Expression
+    permits Expression.Constant,
+        Expression.Symbol,
+        Expression.Negation,
+        Expression.Binary,
+        Expression.Call,
+        Expression.Comparison,
+        Expression.Logical,
+        Expression.Conditional {
+
+  /**
+   * A number.
+   *
+   * @param value in working units
+   * @param dimension empty for a bare number
+   * @param text how it was written where it had a unit ({@code 293.15 K}) or a name ({@code pi});
+   *     empty where the value prints itself
+   */
+  record Constant(double value, Optional<Dimension> dimension, Optional<String> text)
+      implements Expression {
+    public Constant {
+      Objects.requireNonNull(dimension, "dimension");
+      Objects.requireNonNull(text, "text");
+    }
+  }
+
+  /** A variable or a parameter. */
+  record Symbol(String name) implements Expression {
+    public Symbol {
+      Objects.requireNonNull(name, "name");
+    }
+  }
+
+  record Negation(Expression operand) implements Expression {
+    public Negation {
+      Objects.requireNonNull(operand, "operand");
+    }
+  }
+
+  enum Operator {
+    ADD,
+    SUBTRACT,
+    MULTIPLY,
+    DIVIDE,
+    POWER
+  }
+
+  record Binary(Operator operator, Expression left, Expression right) implements Expression {
+    public Binary {
+      Objects.requireNonNull(operator, "operator");
+      Objects.requireNonNull(left, "left");
+      Objects.requireNonNull(right, "right");
+    }
+  }
+
+  /** A named function of one or more arguments. */
+  record Call(Function function, List<Expression> arguments) implements Expression {
+    public Call {
+      Objects.requireNonNull(function, "function");
+      arguments = List.copyOf(arguments);
+      function.requireArguments(arguments.size());
+    }
+  }
+
+  enum Relation {
+    LESS,
+    LESS_OR_EQUAL,
+    GREATER,
+    GREATER_OR_EQUAL,
+    EQUAL,
+    NOT_EQUAL
+  }
+
+  record Comparison(Relation relation, Expression left, Expression right) implements Expression {
+    public Comparison {
+      Objects.requireNonNull(relation, "relation");
+      Objects.requireNonNull(left, "left");
+      Objects.requireNonNull(right, "right");
+    }
+  }
+
+  enum Connective {
+    AND,
+    OR,
+    NOT
+  }
+
+  /** {@code and}, {@code or} of two or more conditions; {@code not} of one. */
+  record Logical(Connective connective, List<Expression> conditions) implements Expression {
+    public Logical {
+      Objects.requireNonNull(connective, "connective");
+      conditions = List.copyOf(conditions);
+    }
+  }
+
+  /** {@code if(condition, then, otherwise)}. */
+  record Conditional(Expression condition, Expression then, Expression otherwise)
+      implements Expression {
+    public Conditional {
+      Objects.requireNonNull(condition, "condition");
+      Objects.requireNonNull(then, "then");
+      Objects.requireNonNull(otherwise, "otherwise");
+    }
+  }
+
+  static Constant number(double value) {
+    return new Constant(value, Optional.empty(), Optional.empty());
+  }
+
+  static Symbol symbol(String name) {
+    return new Symbol(name);
+  }
+
+  default Expression plus(Expression other) {
+    return new Binary(Operator.ADD, this, other);
+  }
+
+  default Expression minus(Expression other) {
+    return new Binary(Operator.SUBTRACT, this, other);
+  }
+
+  default Expression times(Expression other) {
+    return new Binary(Operator.MULTIPLY, this, other);
+  }
+
+  default Expression over(Expression other) {
+    return new Binary(Operator.DIVIDE, this, other);
+  }
+
+  default Expression power(double exponent) {
+    return new Binary(Operator.POWER, this, number(exponent));
+  }
+
+  default Expression negated() {
+    return new Negation(this);
+  }
+
+  static Call call(Function function, Expression... arguments) {
+    return new Call(function, List.of(arguments));
+  }
+}

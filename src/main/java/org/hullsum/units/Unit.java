@@ -1,0 +1,33 @@
+package org.hullsum.units;
+
+import java.util.Objects;
+
+/**
+ * A unit of measurement: a value v in this unit is {@code v · scale + offset} in coherent SI units.
+ *
+ * @param code how it was written, such as {@code m3/h}
+ * @param dimension what it measures
+ * @param scale size in the coherent SI unit, positive
+ * @param offset zero but for temperatures in degC and degF that stand alone
+ */
+public record Unit(String code, Dimension dimension, double scale, double offset) {
+  public static final Unit ONE = new Unit("1", Dimension.NONE, 1, 0);
+
+  public Unit {
+    Objects.requireNonNull(code, "code");
+    Objects.requireNonNull(dimension, "dimension");
+    if (!(scale > 0) || Double.isInfinite(scale)) {
+      throw new IllegalArgumentException("unit " + code + " has scale " + scale);
+    }
+  }
+
+  /** A value in this unit, in coherent SI units. */
+  public double toSi(double value) {
+    return value * scale + offset;
+  }
+
+  /** A value in coherent SI units, in this unit. */
+  public double fromSi(double value) {
+    return (value - offset) / scale;
+  }
+}
