@@ -19,6 +19,30 @@ public sealed interface Expression
         Expression.Logical,
         Expression.Conditional {
 
+  /** One method per alternative. */
+  interface Visitor<R> {
+    R constant(Constant constant);
+
+    R symbol(Symbol symbol);
+
+    R negation(Negation negation);
+
+    R binary(Binary binary);
+
+    R call(Call call);
+
+    R comparison(Comparison comparison);
+
+    R logical(Logical logical);
+
+    R conditional(Conditional conditional);
+  }
+
+  <R> R accept(Visitor<R> visitor);
+
+  /** The operands, in the order in which they are written. */
+  List<Expression> children();
+
   /**
    * A number.
    *
@@ -33,6 +57,16 @@ public sealed interface Expression
       Objects.requireNonNull(dimension, "dimension");
       Objects.requireNonNull(text, "text");
     }
+
+    @Override
+    public <R> R accept(Visitor<R> visitor) {
+      return visitor.constant(this);
+    }
+
+    @Override
+    public List<Expression> children() {
+      return List.of();
+    }
   }
 
   /** A variable or a parameter. */
@@ -40,11 +74,31 @@ public sealed interface Expression
     public Symbol {
       Objects.requireNonNull(name, "name");
     }
+
+    @Override
+    public <R> R accept(Visitor<R> visitor) {
+      return visitor.symbol(this);
+    }
+
+    @Override
+    public List<Expression> children() {
+      return List.of();
+    }
   }
 
   record Negation(Expression operand) implements Expression {
     public Negation {
       Objects.requireNonNull(operand, "operand");
+    }
+
+    @Override
+    public <R> R accept(Visitor<R> visitor) {
+      return visitor.negation(this);
+    }
+
+    @Override
+    public List<Expression> children() {
+      return List.of(operand);
     }
   }
 
@@ -62,6 +116,16 @@ public sealed interface Expression
       Objects.requireNonNull(left, "left");
       Objects.requireNonNull(right, "right");
     }
+
+    @Override
+    public <R> R accept(Visitor<R> visitor) {
+      return visitor.binary(this);
+    }
+
+    @Override
+    public List<Expression> children() {
+      return List.of(left, right);
+    }
   }
 
   /** A named function of one or more arguments. */
@@ -70,6 +134,16 @@ public sealed interface Expression
       Objects.requireNonNull(function, "function");
       arguments = List.copyOf(arguments);
       function.requireArguments(arguments.size());
+    }
+
+    @Override
+    public <R> R accept(Visitor<R> visitor) {
+      return visitor.call(this);
+    }
+
+    @Override
+    public List<Expression> children() {
+      return arguments;
     }
   }
 
@@ -88,6 +162,16 @@ public sealed interface Expression
       Objects.requireNonNull(left, "left");
       Objects.requireNonNull(right, "right");
     }
+
+    @Override
+    public <R> R accept(Visitor<R> visitor) {
+      return visitor.comparison(this);
+    }
+
+    @Override
+    public List<Expression> children() {
+      return List.of(left, right);
+    }
   }
 
   enum Connective {
@@ -102,6 +186,16 @@ public sealed interface Expression
       Objects.requireNonNull(connective, "connective");
       conditions = List.copyOf(conditions);
     }
+
+    @Override
+    public <R> R accept(Visitor<R> visitor) {
+      return visitor.logical(this);
+    }
+
+    @Override
+    public List<Expression> children() {
+      return conditions;
+    }
   }
 
   /** {@code if(condition, then, otherwise)}. */
@@ -111,6 +205,16 @@ public sealed interface Expression
       Objects.requireNonNull(condition, "condition");
       Objects.requireNonNull(then, "then");
       Objects.requireNonNull(otherwise, "otherwise");
+    }
+
+    @Override
+    public <R> R accept(Visitor<R> visitor) {
+      return visitor.conditional(this);
+    }
+
+    @Override
+    public List<Expression> children() {
+      return List.of(condition, then, otherwise);
     }
   }
 

@@ -1,0 +1,88 @@
+package org.hullsum.expression;
+
+import java.util.ArrayList;
+import java.util.IdentityHashMap;
+import java.util.List;
+import java.util.Map;
+import org.hullsum.expression.Expression.Binary;
+import org.hullsum.expression.Expression.Call;
+import org.hullsum.expression.Expression.Comparison;
+import org.hullsum.expression.Expression.Conditional;
+import org.hullsum.expression.Expression.Constant;
+import org.hullsum.expression.Expression.Logical;
+import org.hullsum.expression.Expression.Negation;
+import org.hullsum.expression.Expression.Symbol;
+
+/**
+ * Rewrites an expression from the leaves up, each shared sub-expression once; by itself it changes
+ * nothing and returns the same nodes.
+ */
+abstract class Rewriting implements Expression.Visitor<Expression> {
+  private final Map<Expression, Expression> done = new IdentityHashMap<>();
+
+  final Expression rewrite(Expression e) {
+    Expression known = done.get(e);
+    if (known == null) {
+      known = e.accept(this);
+      done.put(e, known);
+    }
+    return known;
+  }
+
+  final List<Expression> rewriteAll(List<Expression> list) {
+    List<Expression> rewritten = new ArrayList<>(list.size());
+    for (Expression e : list) {
+      rewritten.add(rewrite(e));
+    }
+    return rewritten;
+  }
+
+  @Override
+  public Expression constant(Constant constant) {
+    return constant;
+  }
+
+  @Override
+  public Expression symbol(Symbol symbol) {
+    return symbol;
+  }
+
+  @Override
+  public Expression negation(Negation negation) {
+    Expression operand = rewrite(negation.operand());
+    return operand == negation.operand() ? negation : new Negation(operand);
+  }
+
+  @Override
+  public Expression binary(Binary binary) {
+    Expression left = rewrite(binary.left());
+    Expression right = rewrite(binary.right());
+    return left == binary.left() && right == binary.right()
+        ? binary
+        : new Binary(binary.operator(), left, right);
+  }
+
+  @Override
+  public Expression call(Call call) {
+    return new Call(call.function(), rewriteAll(call.arguments()));
+  }
+
+  @Override
+  public Expression comparison(Comparison comparison) {
+    return new Comparison(
+        comparison.relation(), rewrite(comparison.left()), rewrite(comparison.right()));
+  }
+
+  @Override
+  public Expression logical(Logical logical) {
+    return new Logical(logical.connective(), rewriteAll(logical.conditions()));
+  }
+
+  @Override
+  public Expression conditional(Conditional conditional) {
+    return new Conditional(
+        rewrite(conditional.condition()),
+        rewrite(conditional.then()),
+        rewrite(conditional.otherwise()));
+  }
+}

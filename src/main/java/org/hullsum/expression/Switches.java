@@ -1,0 +1,84 @@
+package org.hullsum.expression;
+
+import java.util.ArrayList;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Set;
+import org.hullsum.expression.Expression.Call;
+import org.hullsum.expression.Expression.Comparison;
+
+/**
+ * The functions on whose zero sets an expression has a kink or a jump: the arguments of {@code abs}
+ * and {@code sign}, the differences of any two arguments of {@code min} and {@code max}, and left
+ * less right side of each comparison.
+ *
+ * <p>Between these curves the expression is as smooth as its smooth functions are. The curves where
+ * the result itself is not smooth are among those given; not all need be (the other branch may
+ * hold, two branches may join smoothly).
+ */
+public final class Switches {
+  private Switches() {}
+
+  /** All of them, simplified, without repetition (up to the sign) and without constants. */
+  public static List<Expression> of(Expression e) {
+    Set<Expression> switches = new LinkedHashSet<>();
+    collectKinks(e, switches);
+    collectJumps(e, switches);
+    return List.copyOf(switches);
+  }
+
+  /** Those at which the value itself may jump: arguments of {@code sign} and comparisons. */
+  public static List<Expression> jumps(Expression e) {
+    Set<Expression> switches = new LinkedHashSet<>();
+    collectJumps(e, switches);
+    return List.copyOf(switches);
+  }
+
+  private static void collectKinks(Expression e, Set<Expression> switches) {
+    for (Expression part : Symbols.parts(e)) {
+      if (part instanceof Call call) {
+        List<Expression> arguments = call.arguments();
+        switch (call.function()) {
+          case ABS -> add(arguments.get(0), switches);
+          case MIN, MAX -> {
+            for (int i = 0; i < arguments.size(); i++) {
+              for (int j = i + 1; j < arguments.size(); j++) {
+                add(arguments.get(i).minus(arguments.get(j)), switches);
+              }
+            }
+          }
+          default -> {}
+        }
+      }
+    }
+  }
+
+  private static void collectJumps(Expression e, Set<Expression> switches) {
+    for (Expression part : Symbols.parts(e)) {
+      if (part instanceof Call call && call.function() == Function.SIGN) {
+        add(call.arguments().get(0), switches);
+      } else if (part instanceof Comparison comparison) {
+        add(comparison.left().minus(comparison.right()), switches);
+      }
+    }
+  }
+
+  private static void add(Expression function, Set<Expression> switches) {
+    Expression simple = Simplifier.simplify(function);
+    if (Symbols.in(simple).isEmpty()) {
+      return;
+    }
+    List<Expression> opposite = new ArrayList<>();
+    opposite.add(Simplifier.simplify(simple.negated()));
+    opposite.add(Simplifier.simplify(swapped(function)));
+    if (opposite.stream().noneMatch(switches::contains)) {
+      switches.add(simple);
+    }
+  }
+
+  private static Expression swapped(Expression function) {
+    return function instanceof Expression.Binary b && b.operator() == Expression.Operator.SUBTRACT
+        ? b.right().minus(b.left())
+        : function.negated();
+  }
+}
