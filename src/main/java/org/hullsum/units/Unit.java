@@ -13,6 +13,9 @@ import java.util.Objects;
 public record Unit(String code, Dimension dimension, double scale, double offset) {
   public static final Unit ONE = new Unit("1", Dimension.NONE, 1, 0);
 
+  /** Two sizes that came about by different multiplications differ by a few roundings only. */
+  private static final double SAME_SIZE = 1e-14;
+
   public Unit {
     Objects.requireNonNull(code, "code");
     Objects.requireNonNull(dimension, "dimension");
@@ -29,5 +32,20 @@ public record Unit(String code, Dimension dimension, double scale, double offset
   /** A value in coherent SI units, in this unit. */
   public double fromSi(double value) {
     return (value - offset) / scale;
+  }
+
+  /** This unit for differences: the same without its offset. */
+  public Unit difference() {
+    return offset == 0 ? this : new Unit(code, dimension, scale, 0);
+  }
+
+  /**
+   * Whether a number means the same in both units: same dimension, size and zero, whatever their
+   * codes are.
+   */
+  public boolean sameScale(Unit other) {
+    return dimension.equals(other.dimension)
+        && Math.abs(scale - other.scale) <= SAME_SIZE * scale
+        && Math.abs(offset - other.offset) <= SAME_SIZE * Math.abs(offset);
   }
 }

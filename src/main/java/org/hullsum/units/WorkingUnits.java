@@ -19,6 +19,46 @@ public record WorkingUnits(
   public static final WorkingUnits SI = new WorkingUnits(1, 1, 1, 1, false);
   public static final WorkingUnits NONE = new WorkingUnits(1, 1, 1, 1, true);
 
+  public WorkingUnits {
+    requireSize("length", length);
+    requireSize("mass", mass);
+    requireSize("time", time);
+    requireSize("temperature", temperature);
+  }
+
+  private static void requireSize(String name, double size) {
+    if (!(size > 0) || Double.isInfinite(size)) {
+      throw new IllegalArgumentException("working unit of " + name + " has size " + size);
+    }
+  }
+
+  /**
+   * Working units from four units.
+   *
+   * @throws IllegalArgumentException if one of them has another dimension, or a zero of its own
+   *     ({@code degC}): a reader of files checks that first, with {@link #fits}
+   */
+  public static WorkingUnits of(Unit length, Unit time, Unit mass, Unit temperature) {
+    return new WorkingUnits(
+        size(length, Dimension.LENGTH),
+        size(mass, Dimension.MASS),
+        size(time, Dimension.TIME),
+        size(temperature, Dimension.TEMPERATURE),
+        false);
+  }
+
+  /** Whether a unit can be the working unit of a dimension: it measures it, from zero. */
+  public static boolean fits(Unit unit, Dimension dimension) {
+    return unit.dimension().equals(dimension) && unit.offset() == 0;
+  }
+
+  private static double size(Unit unit, Dimension dimension) {
+    if (!fits(unit, dimension)) {
+      throw new IllegalArgumentException(unit.code() + " is no working unit of " + dimension);
+    }
+    return unit.scale();
+  }
+
   /** Size of the coherent working unit of a dimension in the coherent SI unit. */
   public double scale(Dimension dimension) {
     Objects.requireNonNull(dimension, "dimension");
