@@ -1,5 +1,6 @@
 package org.hullsum.expression;
 
+import java.util.Map;
 import java.util.Objects;
 import org.hullsum.numeric.Vector3;
 
@@ -58,5 +59,22 @@ public record VectorExpression(Expression x, Expression y, Expression z) {
   public VectorExpression unit() {
     Expression length = Expression.call(Function.SQRT, dot(this));
     return new VectorExpression(x.over(length), y.over(length), z.over(length));
+  }
+
+  public VectorExpression derivative(String symbol) {
+    return new VectorExpression(
+        Derivative.of(x, symbol), Derivative.of(y, symbol), Derivative.of(z, symbol));
+  }
+
+  public VectorExpression replace(Map<String, Expression> replacements) {
+    return new VectorExpression(
+        Substitution.replace(x, replacements),
+        Substitution.replace(y, replacements),
+        Substitution.replace(z, replacements));
+  }
+
+  public VectorExpression simplified() {
+    return new VectorExpression(
+        Simplifier.simplify(x), Simplifier.simplify(y), Simplifier.simplify(z));
   }
 }

@@ -43,6 +43,21 @@ public record Chart(
     rim = Set.copyOf(rim);
   }
 
+  /** r_u. */
+  public VectorExpression tangentU() {
+    return position.derivative(U);
+  }
+
+  /** r_v. */
+  public VectorExpression tangentV() {
+    return position.derivative(V);
+  }
+
+  /** r_u × r_v: the construction normal times the area per unit of u and v. */
+  public VectorExpression areaVector() {
+    return tangentU().cross(tangentV()).simplified();
+  }
+
   public static Expression u() {
     return Expression.symbol(U);
   }
