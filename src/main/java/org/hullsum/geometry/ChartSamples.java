@@ -8,8 +8,10 @@ final class ChartSamples {
   static double[][] grid(int n) {
     double[][] at = new double[2][n * n];
     for (int i = 0; i < n * n; i++) {
-      at[0][i] = (i / n + 0.5) / n;
-      at[1][i] = (i % n + 0.5) / n;
+      int row = i / n;
+      int column = i % n;
+      at[0][i] = (row + 0.5) / n;
+      at[1][i] = (column + 0.5) / n;
     }
     return at;
   }
