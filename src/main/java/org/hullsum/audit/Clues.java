@@ -1,0 +1,86 @@
+package org.hullsum.audit;
+
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.Set;
+import org.hullsum.numeric.Vector3;
+
+/**
+ * What geometry and computation have shown, by which explanations are allowed or vetoed.
+ *
+ * @param inward patches whose normal as declared points the wrong way
+ * @param surfaced patches that have a surface
+ * @param overlaps groups of patches that lie on one another
+ * @param open volumes whose surface was proved open
+ * @param surfaceless volumes with a patch without surface, of whose closedness nothing can be said
+ * @param gaps by volume or envelope
+ * @param fields by volume or envelope, where a field gives the fluxes
+ */
+record Clues(
+    Set<String> inward,
+    Set<String> surfaced,
+    List<Overlap> overlaps,
+    Set<String> open,
+    Set<String> surfaceless,
+    Map<String, Gap> gaps,
+    Map<String, Field> fields) {
+  /** Nothing known. */
+  static final Clues NONE =
+      new Clues(Set.of(), Set.of(), List.of(), Set.of(), Set.of(), Map.of(), Map.of());
+
+  /**
+   * Two patches of one volume that cover the same piece of surface.
+   *
+   * @param first stands earlier in the case
+   * @param second stands later
+   */
+  record Overlap(String first, String second) {
+    boolean has(String patch) {
+      return first.equals(patch) || second.equals(patch);
+    }
+  }
+
+  /**
+   * The one plane gap that the moments give.
+   *
+   * @param centre in SI
+   * @param area in SI
+   * @param between the patches at its rim, where they are known
+   * @param flux outward through a plane disk over it
+   * @param residualThen the residual of the balance with that flux; empty where it can't be said
+   */
+  record Gap(
+      Vector3 centre,
+      double area,
+      List<String> between,
+      Optional<Double> flux,
+      Optional<Double> residualThen) {
+    Gap {
+      between = List.copyOf(between);
+    }
+  }
+
+  /**
+   * The field that gives every flux of a conservation check.
+   *
+   * @param names of the fields
+   * @param makes the volume integral of the divergence
+   * @param error a bound on it
+   */
+  record Field(List<String> names, double makes, double error) {
+    Field {
+      names = List.copyOf(names);
+    }
+  }
+
+  Clues {
+    inward = Set.copyOf(inward);
+    surfaced = Set.copyOf(surfaced);
+    overlaps = List.copyOf(overlaps);
+    open = Set.copyOf(open);
+    surfaceless = Set.copyOf(surfaceless);
+    gaps = Map.copyOf(gaps);
+    fields = Map.copyOf(fields);
+  }
+}
