@@ -41,4 +41,9 @@ public record Accuracy(
   double tolerance(double magnitude) {
     return Math.max(absolute, relative * magnitude);
   }
+
+  /** The error allowed for the magnitude itself; what is negligible needs no magnitude. */
+  double magnitudeTolerance(double magnitude) {
+    return Math.max(absolute, magnitudeRelative * magnitude);
+  }
 }

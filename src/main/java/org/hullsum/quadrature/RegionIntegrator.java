@@ -153,7 +153,7 @@ final class RegionIntegrator {
       byMagnitude =
           Math.max(
               byMagnitude,
-              part(region.magnitudeError[c], accuracy.magnitudeRelative() * magnitude[c]));
+              part(region.magnitudeError[c], accuracy.magnitudeTolerance(magnitude[c])));
     }
     region.urgency = Math.max(urgency, byMagnitude);
     region.magnitudeIsUrgent = byMagnitude > 1.0 / regions.size() && urgency * regions.size() < 1;
@@ -187,7 +187,7 @@ final class RegionIntegrator {
 
   private boolean reached(int c) {
     return error[c] + ROUNDING * magnitude[c] <= accuracy.tolerance(magnitude[c])
-        && magnitudeError[c] <= accuracy.magnitudeRelative() * magnitude[c];
+        && magnitudeError[c] <= accuracy.magnitudeTolerance(magnitude[c]);
   }
 
   /** Refines one region by a larger rule or by halving; false where the limit forbids it. */
