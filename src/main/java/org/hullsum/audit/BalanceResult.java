@@ -150,4 +150,12 @@ public record BalanceResult(
     terms = List.copyOf(terms);
     budget = List.copyOf(budget);
   }
+
+  /**
+   * What separates a residual from zero or from a tolerance: w = numericalError + coverageFactor ·
+   * standardUncertainty; empty where no error bound is known.
+   */
+  public Optional<Double> margin() {
+    return numericalError.map(e -> e + coverageFactor * standardUncertainty);
+  }
 }
