@@ -8,6 +8,7 @@ import java.util.function.DoubleBinaryOperator;
  * @param kind what makes it easy or hard
  * @param exact the answer, to all digits of a double
  */
+@SuppressWarnings("ArrayRecordComponent") // handed on to the integrator as it is
 record BatteryCase(
     String name,
     Kind kind,
