@@ -1,5 +1,6 @@
 package org.hullsum.quadrature;
 
+import java.util.List;
 import java.util.function.DoubleBinaryOperator;
 
 /**
@@ -13,7 +14,7 @@ record BatteryCase(
     String name,
     Kind kind,
     DoubleBinaryOperator integrand,
-    DoubleBinaryOperator[] switches,
+    List<DoubleBinaryOperator> switches,
     boolean periodicU,
     boolean periodicV,
     double exact) {
@@ -29,11 +30,11 @@ record BatteryCase(
   }
 
   static BatteryCase of(String name, Kind kind, DoubleBinaryOperator integrand, double exact) {
-    return new BatteryCase(name, kind, integrand, new DoubleBinaryOperator[0], false, false, exact);
+    return new BatteryCase(name, kind, integrand, List.of(), false, false, exact);
   }
 
   BatteryCase switching(DoubleBinaryOperator... functions) {
-    return new BatteryCase(name, kind, integrand, functions, periodicU, periodicV, exact);
+    return new BatteryCase(name, kind, integrand, List.of(functions), periodicU, periodicV, exact);
   }
 
   BatteryCase periodic(boolean inU, boolean inV) {
@@ -43,7 +44,7 @@ record BatteryCase(
   SquareProblem problem(Accuracy accuracy) {
     return new SquareProblem(
         Functions.integrand(integrand),
-        Functions.switches(switches),
+        Functions.switches(switches.toArray(new DoubleBinaryOperator[0])),
         periodicU,
         periodicV,
         accuracy,
