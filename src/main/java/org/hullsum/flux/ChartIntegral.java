@@ -20,6 +20,9 @@ import org.hullsum.quadrature.SwitchFunctions;
  * are set to zero where the trim cut the surface away. Not thread-safe.
  */
 final class ChartIntegral {
+  /** For integrals of which no magnitude is wanted. */
+  static final double ANY_MAGNITUDE = 1e9;
+
   /** Points of the coarse look in each direction. */
   private static final int LOOKS = 9;
 
@@ -56,17 +59,9 @@ final class ChartIntegral {
    */
   double[] coarseMeans(OptionalDouble instant) {
     int n = LOOKS * LOOKS;
-    double[] u = new double[n];
-    double[] v = new double[n];
-    for (int i = 0; i < n; i++) {
-      int row = i / LOOKS;
-      int column = i % LOOKS;
-      u[i] = (row + 0.5) / LOOKS;
-      // Sheared, so that no column of the lattice runs along a line of symmetry.
-      v[i] = (column + (u[i] + 0.25) % 1) / LOOKS;
-    }
+    double[][] at = lattice(LOOKS);
     double[][] values = new double[coarse.components()][n];
-    coarse.at(instant).evaluate(n, u, v, values);
+    coarse.at(instant).evaluate(n, at[0], at[1], values);
     double[] means = new double[values.length];
     for (int k = 0; k < means.length; k++) {
       for (double value : values[k]) {
@@ -74,6 +69,19 @@ final class ChartIntegral {
       }
     }
     return means;
+  }
+
+  /** n × n points of the unit square: rows of u and of v. */
+  static double[][] lattice(int n) {
+    double[][] at = new double[2][n * n];
+    for (int i = 0; i < n * n; i++) {
+      int row = i / n;
+      int column = i % n;
+      at[0][i] = (row + 0.5) / n;
+      // Sheared, so that no column of the lattice runs along a line of symmetry.
+      at[1][i] = (column + (at[0][i] + 0.25) % 1) / n;
+    }
+    return at;
   }
 
   /** Integrates every formula to the accuracy. */

@@ -50,9 +50,6 @@ public record PatchGeometry(
   private static final int SQUARES = 13;
   private static final int COMPONENTS = 16;
 
-  /** No magnitudes are wanted of these integrals. */
-  private static final double ANY_MAGNITUDE = 1e9;
-
   public PatchGeometry {
     Objects.requireNonNull(vectorArea, "vectorArea");
     Objects.requireNonNull(reference, "reference");
@@ -85,7 +82,11 @@ public record PatchGeometry(
     }
     double absolute = Math.pow(10, -digits) * coarseArea / (2 * charts.size());
     Accuracy accuracy =
-        new Accuracy(0, Math.max(absolute, Double.MIN_NORMAL), ANY_MAGNITUDE, Accuracy.USUAL_LIMIT);
+        new Accuracy(
+            0,
+            Math.max(absolute, Double.MIN_NORMAL),
+            ChartIntegral.ANY_MAGNITUDE,
+            Accuracy.USUAL_LIMIT);
     Sum[] sums = new Sum[COMPONENTS];
     double[] errors = new double[COMPONENTS];
     for (int k = 0; k < COMPONENTS; k++) {

@@ -1,0 +1,241 @@
+package org.hullsum.flux;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import org.apache.commons.numbers.core.Sum;
+import org.hullsum.expression.Expression;
+import org.hullsum.numeric.Vector3;
+import org.hullsum.quadrature.Accuracy;
+import org.hullsum.quadrature.Integral;
+
+/**
+ * Volume integrals from the boundary alone, by signed cones from a point p to every patch: ∫_V g dV
+ * = Σ ∬ (∫_0^1 g(p + s(r − p)) s² ds) (r − p)·(r_u × r_v) du dv over the outward boundary.
+ *
+ * <p>This is the divergence theorem for the field whose divergence is g and which points away from
+ * p. It holds for any p as long as g is defined and integrable on the cones; what they cover
+ * outside the volume cancels. Not thread-safe.
+ */
+final class ConeRoute {
+  /** Points of the coarse look at each chart, in each direction. */
+  private static final int LOOKS = 9;
+
+  /** Relative accuracy to which ∭|g| is wanted. */
+  private static final double MAGNITUDE_ACCURACY = 0.005;
+
+  /** The region is not taken for a smaller part of the cones than this at first sight. */
+  private static final double LEAST_SHARE = 0.02;
+
+  /** Rounding relative to the sum of |g| over all cones: nothing below it can be asked for. */
+  private static final double ROUNDING = 1e-14;
+
+  /** Part of the allowed error that the inner integrals may take. */
+  private static final double INNER_SHARE = 0.1;
+
+  private final List<ConeIntegrand> cones = new ArrayList<>();
+  private final List<Expression> densities;
+  private final Map<String, Double> constants;
+  private final OptionalDouble instant;
+  private final double size;
+
+  /**
+   * What was found from one p.
+   *
+   * @param values by density
+   * @param errorBounds by density
+   * @param magnitude ∭|g| of the first density
+   * @param status of the first density
+   */
+  record Outcome(
+      List<Double> values,
+      List<Double> errorBounds,
+      double magnitude,
+      long evaluations,
+      Integral.Status status,
+      Optional<Vector3> nonFiniteAt) {}
+
+  /**
+   * @param densities the one wanted, then others that come along
+   * @param size of the volume
+   */
+  ConeRoute(
+      List<BoundaryPatch> boundary,
+      List<Expression> densities,
+      Map<String, Double> constants,
+      OptionalDouble instant,
+      double size) {
+    this.densities = densities;
+    this.constants = constants;
+    this.instant = instant;
+    this.size = size;
+    for (BoundaryPatch patch : boundary) {
+      for (PulledBackChart chart : patch.surface().charts()) {
+        cones.add(new ConeIntegrand(chart, patch.outward(), densities, constants, instant));
+      }
+    }
+  }
+
+  /**
+   * Integrates with the cones' common apex at p.
+   *
+   * @param relative accuracy relative to ∭|g|
+   * @param limit largest number of points of each chart
+   */
+  Outcome from(Vector3 apex, double relative, long limit) {
+    Densities evaluated = new Densities(densities, constants, instant, size, RayIntegrals.BLOCK);
+    Coarse coarse = look(evaluated, apex);
+    double magnitude = Math.max(coarse.magnitude, LEAST_SHARE * coarse.coneMagnitude);
+    Totals totals = pass(evaluated, apex, coarse, relative * magnitude, limit);
+    if (totals.isFinite() && totals.errorBound(0) > relative * totals.magnitude()) {
+      // The coarse look took the region for larger than it is.
+      long spent = totals.evaluations;
+      totals = pass(evaluated, apex, coarse, relative * totals.magnitude(), limit);
+      totals.evaluations += spent;
+    }
+    if (totals.isFinite() && totals.magnitudeError() > MAGNITUDE_ACCURACY * totals.magnitude()) {
+      measureMagnitude(totals, limit);
+    }
+    return totals.outcome();
+  }
+
+  /** All cones to one accuracy. */
+  private Totals pass(
+      Densities evaluated, Vector3 apex, Coarse coarse, double allowed, long limit) {
+    double rounding = ROUNDING * coarse.coneMagnitude;
+    double error = Math.max(Math.max(allowed, rounding), Double.MIN_NORMAL);
+    double perRay = INNER_SHARE * error / Math.max(coarse.coneVolume, Double.MIN_NORMAL);
+    int level = RayIntegrals.level(evaluated, apex, coarse.ends, perRay);
+    RayIntegrals rays = new RayIntegrals(evaluated, apex, level, perRay);
+    Accuracy accuracy =
+        new Accuracy(0, error / (2 * cones.size()), ChartIntegral.ANY_MAGNITUDE, limit);
+    Totals totals = new Totals(densities.size());
+    for (ConeIntegrand cone : cones) {
+      cone.aim(apex, rays, densities.size());
+      Integral[] parts = cone.integrate(accuracy);
+      totals.add(parts);
+      if (parts[0].nonFiniteAt().isPresent()) {
+        totals.nonFiniteAt = Optional.of(cone.position(parts[0].nonFiniteAt().get()));
+        break;
+      }
+    }
+    return totals;
+  }
+
+  private void measureMagnitude(Totals totals, long limit) {
+    double error = MAGNITUDE_ACCURACY * Math.max(totals.magnitude(), Double.MIN_NORMAL);
+    Accuracy accuracy = new Accuracy(0, error / cones.size(), ChartIntegral.ANY_MAGNITUDE, limit);
+    int row = densities.size();
+    totals.sums[row] = Sum.create();
+    for (ConeIntegrand cone : cones) {
+      Integral part = cone.integrateMagnitude(accuracy);
+      totals.sums[row].add(part.value());
+      totals.evaluations += part.evaluations();
+    }
+  }
+
+  private Coarse look(Densities evaluated, Vector3 apex) {
+    RayIntegrals rays =
+        new RayIntegrals(evaluated, apex, RayIntegrals.COARSE, Double.POSITIVE_INFINITY);
+    Coarse coarse = new Coarse();
+    int each = LOOKS * LOOKS;
+    coarse.ends = new double[3][each * cones.size()];
+    double[][] results = new double[RayIntegrals.rows(densities.size())][each];
+    boolean[] all = new boolean[each];
+    Arrays.fill(all, true);
+    int first = 0;
+    for (ConeIntegrand cone : cones) {
+      double[][] rows = cone.lattice(apex, LOOKS);
+      rays.integrate(each, rows, all, results);
+      double[] absolute = results[densities.size()];
+      for (int i = 0; i < each; i++) {
+        double height = rows[3][i];
+        if (Double.isFinite(absolute[i] * height)) {
+          coarse.magnitude += height * absolute[i];
+          coarse.coneMagnitude += Math.abs(height) * absolute[i];
+          coarse.coneVolume += Math.abs(height);
+        }
+      }
+      for (int axis = 0; axis < 3; axis++) {
+        System.arraycopy(rows[axis], 0, coarse.ends[axis], first, each);
+      }
+      first += each;
+    }
+    coarse.magnitude = Math.abs(coarse.magnitude);
+    return coarse;
+  }
+
+  /** What a first look at a lattice of rays shows. */
+  private static final class Coarse {
+    private double[][] ends = new double[3][0];
+
+    /** ∭|g|, about. */
+    private double magnitude;
+
+    /** The sum of |g| over all cones, wherever they go. */
+    private double coneMagnitude;
+
+    /** ∬|(r − p)·N|. */
+    private double coneVolume;
+  }
+
+  /** The sums over all charts: per density, of |g|, and of the inner error. */
+  private static final class Totals {
+    private final int densities;
+    private final Sum[] sums;
+    private final double[] bounds;
+    private long evaluations;
+    private Integral.Status status = Integral.Status.REACHED;
+    private Optional<Vector3> nonFiniteAt = Optional.empty();
+
+    Totals(int densities) {
+      this.densities = densities;
+      sums = new Sum[RayIntegrals.rows(densities)];
+      bounds = new double[sums.length];
+      for (int k = 0; k < sums.length; k++) {
+        sums[k] = Sum.create();
+      }
+    }
+
+    void add(Integral[] parts) {
+      for (int k = 0; k < sums.length; k++) {
+        sums[k].add(parts[k].value());
+        bounds[k] += parts[k].errorBound();
+      }
+      evaluations += parts[0].evaluations();
+      status = parts[0].reached() ? status : parts[0].status();
+    }
+
+    boolean isFinite() {
+      return nonFiniteAt.isEmpty();
+    }
+
+    /** The bound of the outer integral and that of the inner ones. */
+    double errorBound(int density) {
+      double inner = sums[densities + 1].getAsDouble();
+      return bounds[density] + (density == 0 ? Math.abs(inner) + bounds[densities + 1] : 0);
+    }
+
+    double magnitude() {
+      return Math.abs(sums[densities].getAsDouble());
+    }
+
+    double magnitudeError() {
+      return bounds[densities];
+    }
+
+    Outcome outcome() {
+      List<Double> values = new ArrayList<>();
+      List<Double> errors = new ArrayList<>();
+      for (int k = 0; k < densities; k++) {
+        values.add(sums[k].getAsDouble());
+        errors.add(errorBound(k));
+      }
+      Integral.Status reached = isFinite() ? status : Integral.Status.NOT_FINITE;
+      return new Outcome(values, errors, magnitude(), evaluations, reached, nonFiniteAt);
+    }
+  }
+}

@@ -1,0 +1,195 @@
+package org.hullsum.flux;
+
+import java.util.Arrays;
+import org.hullsum.numeric.Vector3;
+import org.hullsum.quadrature.GaussRule;
+
+/**
+ * The inner integrals of the cone formula, ∫_0^1 g(p + s(r − p)) s² ds, for many end points r at
+ * once.
+ *
+ * <p>For polynomials one Gauss rule is exact. Otherwise two rules of different sizes are compared;
+ * where they differ by more than the tolerance, or a density switches along the ray, the ray is
+ * done by itself, adaptively. The error of each ray comes with it. Not thread-safe.
+ */
+final class RayIntegrals {
+  /** Sizes of the smaller and the larger rule, by level. */
+  private static final int[][] LEVELS = {{6, 9}, {10, 14}, {16, 22}, {26, 36}};
+
+  /** The level for a first look. */
+  static final int COARSE = 1;
+
+  /** Points evaluated in one go. */
+  static final int BLOCK = 4096;
+
+  private final Densities densities;
+  private final Vector3 apex;
+  private final RayRefiner refiner;
+  private final GaussRule[] rules;
+  private final double tolerance;
+  private final double[][] points = new double[3][BLOCK];
+  private final double[][] values;
+  private final double[][] switchValues;
+
+  /**
+   * @param apex p
+   * @param level how large the rules are; of no account for polynomials
+   * @param tolerance allowed error of a ray's integral of the first density
+   */
+  RayIntegrals(Densities densities, Vector3 apex, int level, double tolerance) {
+    this.densities = densities;
+    this.apex = apex;
+    this.tolerance = tolerance;
+    this.rules = rules(densities, level);
+    this.values = new double[densities.count()][BLOCK];
+    this.switchValues = new double[densities.switchCount()][BLOCK];
+    this.refiner = new RayRefiner(densities, tolerance);
+  }
+
+  private static GaussRule[] rules(Densities densities, int level) {
+    if (densities.degree().isPresent()) {
+      // n nodes are exact to degree 2n − 1, and s² adds two.
+      int nodes = (densities.degree().getAsInt() + 2) / 2 + 1;
+      if (nodes <= GaussRule.LARGEST) {
+        return new GaussRule[] {GaussRule.of(nodes)};
+      }
+    }
+    return new GaussRule[] {GaussRule.of(LEVELS[level][0]), GaussRule.of(LEVELS[level][1])};
+  }
+
+  /** Rows that {@link #integrate} writes: one per density, then ∫|g| s² ds of the first, error. */
+  static int rows(int densities) {
+    return densities + 2;
+  }
+
+  /**
+   * Integrates along the rays to the given end points.
+   *
+   * @param wanted the rays that count; the others are set to zero
+   */
+  void integrate(int count, double[][] ends, boolean[] wanted, double[][] results) {
+    int nodes = 0;
+    for (GaussRule rule : rules) {
+      nodes += rule.size();
+    }
+    int chunk = BLOCK / nodes;
+    int[] rays = new int[chunk];
+    int n = 0;
+    for (int i = 0; i < count; i++) {
+      if (wanted[i]) {
+        rays[n++] = i;
+      } else {
+        for (double[] row : results) {
+          row[i] = 0;
+        }
+      }
+      if (n == chunk || (i == count - 1 && n > 0)) {
+        integrate(rays, n, nodes, ends, results);
+        n = 0;
+      }
+    }
+  }
+
+  private void integrate(int[] rays, int n, int nodes, double[][] ends, double[][] results) {
+    place(rays, n, nodes, ends);
+    int total = n * nodes;
+    densities.evaluate(total, points[0], points[1], points[2], values);
+    if (densities.switchCount() > 0) {
+      densities.evaluateSwitches(total, points[0], points[1], points[2], switchValues);
+    }
+    int errorRow = densities.count() + 1;
+    for (int k = 0; k < n; k++) {
+      int ray = rays[k];
+      sum(k * nodes, ray, results);
+      if (tolerance < Double.POSITIVE_INFINITY
+          && (switches(k * nodes, nodes) || !(results[errorRow][ray] <= tolerance))) {
+        Vector3 end = new Vector3(ends[0][ray], ends[1][ray], ends[2][ray]);
+        refiner.refine(apex, end, ray, results);
+      }
+    }
+  }
+
+  private void place(int[] rays, int n, int nodes, double[][] ends) {
+    for (int axis = 0; axis < 3; axis++) {
+      double from = apex.component(axis);
+      for (int k = 0; k < n; k++) {
+        double span = ends[axis][rays[k]] - from;
+        int at = k * nodes;
+        for (GaussRule rule : rules) {
+          for (int j = 0; j < rule.size(); j++) {
+            points[axis][at++] = from + rule.node(j) * span;
+          }
+        }
+      }
+    }
+  }
+
+  private void sum(int first, int ray, double[][] results) {
+    int count = densities.count();
+    double error = 0;
+    for (int k = 0; k < count; k++) {
+      double previous = 0;
+      double absolute = 0;
+      int at = first;
+      for (int r = 0; r < rules.length; r++) {
+        GaussRule rule = rules[r];
+        double sum = 0;
+        absolute = 0;
+        for (int j = 0; j < rule.size(); j++) {
+          double s = rule.node(j);
+          double term = rule.weight(j) * s * s * values[k][at++];
+          sum += term;
+          absolute += Math.abs(term);
+        }
+        if (r == 0) {
+          previous = sum;
+        }
+        results[k][ray] = sum;
+      }
+      if (k == 0) {
+        error = Math.abs(results[0][ray] - previous);
+        results[count][ray] = absolute;
+      }
+    }
+    results[count + 1][ray] = error;
+  }
+
+  private boolean switches(int first, int nodes) {
+    for (double[] function : switchValues) {
+      double low = Double.POSITIVE_INFINITY;
+      double high = Double.NEGATIVE_INFINITY;
+      for (int j = first; j < first + nodes; j++) {
+        low = Math.min(low, function[j]);
+        high = Math.max(high, function[j]);
+      }
+      if (!(low > 0 || high < 0)) {
+        return true;
+      }
+    }
+    return false;
+  }
+
+  /** The smallest level whose error is within the tolerance on most of the given rays. */
+  static int level(Densities densities, Vector3 apex, double[][] ends, double tolerance) {
+    if (densities.degree().isPresent()) {
+      return 0;
+    }
+    int count = ends[0].length;
+    boolean[] all = new boolean[count];
+    Arrays.fill(all, true);
+    double[][] results = new double[rows(densities.count())][count];
+    for (int level = 0; level < LEVELS.length - 1; level++) {
+      // Without a tolerance no ray is refined here.
+      new RayIntegrals(densities, apex, level, Double.POSITIVE_INFINITY)
+          .integrate(count, ends, all, results);
+      int poor = 0;
+      for (double error : results[densities.count() + 1]) {
+        poor += error <= tolerance ? 0 : 1;
+      }
+      if (poor * 20 <= count) {
+        return level;
+      }
+    }
+    return LEVELS.length - 1;
+  }
+}
