@@ -1,7 +1,6 @@
 package org.hullsum.expression;
 
 import java.util.List;
-import java.util.Optional;
 import org.hullsum.expression.Expression.Binary;
 import org.hullsum.expression.Expression.Call;
 import org.hullsum.expression.Expression.Comparison;
@@ -10,7 +9,6 @@ import org.hullsum.expression.Expression.Connective;
 import org.hullsum.expression.Expression.Constant;
 import org.hullsum.expression.Expression.Logical;
 import org.hullsum.expression.Expression.Negation;
-import org.hullsum.expression.Expression.Operator;
 import org.hullsum.expression.Expression.Relation;
 import org.hullsum.expression.Expression.Symbol;
 
@@ -67,7 +65,23 @@ public final class Printer implements Expression.Visitor<Printer.Piece> {
 
   @Override
   public Piece negation(Negation negation) {
-    return new Piece("-" + within(negation.operand(), POWER), NEGATION);
+    Expression operand = negation.operand();
+    if (operand instanceof Negation twice) {
+      return twice.operand().accept(this);
+    }
+    return Algebra.plain(operand)
+        .filter(value -> value < 0)
+        .map(value -> constant(Expression.number(-value)))
+        .orElseGet(() -> opposite(operand.accept(this)));
+  }
+
+  /** The minus of a product is that of its first factor. */
+  private static Piece opposite(Piece operand) {
+    if (operand.binding() != PRODUCT) {
+      return new Piece("-" + operand.within(POWER), NEGATION);
+    }
+    String text = operand.text();
+    return new Piece(text.startsWith("-") ? text.substring(1) : "-" + text, PRODUCT);
   }
 
   @Override
@@ -77,22 +91,17 @@ public final class Printer implements Expression.Visitor<Printer.Piece> {
       case SUBTRACT -> sum(b, " - ", " + ");
       case MULTIPLY -> product(b);
       case DIVIDE -> new Piece(within(b.left(), PRODUCT) + "/" + within(b.right(), POWER), PRODUCT);
-      case POWER -> new Piece(within(b.left(), ATOM) + "^" + exponent(b.right()), POWER);
+      case POWER -> new Piece(within(b.left(), ATOM) + "^" + within(b.right(), NEGATION), POWER);
     };
   }
 
+  /** A term that begins with a minus is taken off instead. */
   private Piece sum(Binary b, String sign, String opposite) {
-    String left = within(b.left(), SUM);
-    Optional<Expression> turned = opposite(b.right());
+    String right = within(b.right(), QUANTITY);
     return new Piece(
-        turned.isPresent()
-            ? left + opposite + within(turned.get(), QUANTITY)
-            : left + sign + within(b.right(), QUANTITY),
+        within(b.left(), SUM)
+            + (right.startsWith("-") ? opposite + right.substring(1) : sign + right),
         SUM);
-  }
-
-  private String exponent(Expression e) {
-    return Algebra.plain(e).isPresent() ? print(e) : within(e, POWER);
   }
 
   private Piece product(Binary b) {
@@ -106,22 +115,6 @@ public final class Printer implements Expression.Visitor<Printer.Piece> {
       return negation(new Negation(b.right()));
     }
     return new Piece(within(b.left(), PRODUCT) + "*" + within(b.right(), POWER), PRODUCT);
-  }
-
-  /** The expression without its leading minus, where it has one. */
-  private static Optional<Expression> opposite(Expression e) {
-    if (e instanceof Negation n) {
-      return Optional.of(n.operand());
-    }
-    Optional<Double> value = Algebra.plain(e);
-    if (value.isPresent()) {
-      return value.filter(v -> v < 0).map(v -> Expression.number(-v));
-    }
-    if (e instanceof Binary b
-        && (b.operator() == Operator.MULTIPLY || b.operator() == Operator.DIVIDE)) {
-      return opposite(b.left()).map(left -> new Binary(b.operator(), left, b.right()));
-    }
-    return Optional.empty();
   }
 
   @Override
