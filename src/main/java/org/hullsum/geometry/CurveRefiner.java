@@ -1,0 +1,168 @@
+package org.hullsum.geometry;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.List;
+import org.hullsum.numeric.Vector3;
+
+/**
+ * Halves segments of a chart's unit square until their images stay within a tolerance of the curve.
+ * For one thread.
+ */
+final class CurveRefiner {
+  private static final int MOST_ROUNDS = 24;
+
+  /** How far to both sides of a segment the curve is sought, relative to its length. */
+  private static final double[] BRACKETS = {0.05, 0.25, 1.0};
+
+  private final int chart;
+  private final ChartEvaluator evaluator;
+  private final ChartEvaluator.Workspace workspace;
+  private final KeptRegion region;
+
+  private final List<Node> nodes = new ArrayList<>();
+
+  /** A point of a chain. */
+  private static final class Node {
+    private final double u;
+    private final double v;
+    private final Vector3 position;
+    private int next;
+
+    Node(double u, double v, Vector3 position, int next) {
+      this.u = u;
+      this.v = v;
+      this.position = position;
+      this.next = next;
+    }
+  }
+
+  CurveRefiner(int chart, ChartEvaluator evaluator, KeptRegion region) {
+    this.chart = chart;
+    this.evaluator = evaluator;
+    this.workspace = evaluator.workspace();
+    this.region = region;
+  }
+
+  /**
+   * The images of the segments, refined.
+   *
+   * @param onTrim whether the segments are chords of the trim's curves; else they are exact
+   */
+  List<BoundaryPiece> refined(List<SquareSegment> segments, boolean onTrim, double tolerance) {
+    nodes.clear();
+    List<Integer> starts = new ArrayList<>();
+    for (SquareSegment s : segments) {
+      int end = add(s.endU(), s.endV(), -1);
+      starts.add(add(s.startU(), s.startV(), end));
+    }
+    List<Integer> open = new ArrayList<>(starts);
+    for (int round = 0; round < MOST_ROUNDS && !open.isEmpty(); round++) {
+      open = halved(open, onTrim, tolerance);
+    }
+    List<BoundaryPiece> pieces = new ArrayList<>();
+    for (int start : starts) {
+      List<Vector3> points = new ArrayList<>();
+      for (int at = start; at >= 0; at = nodes.get(at).next) {
+        points.add(nodes.get(at).position);
+      }
+      pieces.add(new BoundaryPiece(points, chart));
+    }
+    return pieces;
+  }
+
+  private int add(double u, double v, int next) {
+    double sideU = KeptRegion.onSide(u);
+    double sideV = KeptRegion.onSide(v);
+    Vector3 position = evaluator.at(sideU, sideV, workspace).position();
+    if (!position.isFinite()) {
+      position =
+          evaluator.at(KeptRegion.inset(sideU), KeptRegion.inset(sideV), workspace).position();
+    }
+    nodes.add(new Node(sideU, sideV, position, next));
+    return nodes.size() - 1;
+  }
+
+  /** Inserts the middle of each segment; the halves of those that were too coarse. */
+  private List<Integer> halved(List<Integer> open, boolean onTrim, double tolerance) {
+    double[][] middle = new double[2][open.size()];
+    for (int i = 0; i < open.size(); i++) {
+      Node start = nodes.get(open.get(i));
+      Node end = nodes.get(start.next);
+      middle[0][i] = 0.5 * (start.u + end.u);
+      middle[1][i] = 0.5 * (start.v + end.v);
+    }
+    boolean[] found = onTrim ? onCurve(open, middle) : all(open.size());
+    List<Integer> coarse = new ArrayList<>();
+    for (int i = 0; i < open.size(); i++) {
+      if (!found[i]) {
+        continue;
+      }
+      Node start = nodes.get(open.get(i));
+      Node end = nodes.get(start.next);
+      int added = add(middle[0][i], middle[1][i], start.next);
+      start.next = added;
+      if (distance(nodes.get(added).position, start.position, end.position) > tolerance) {
+        coarse.add(open.get(i));
+        coarse.add(added);
+      }
+    }
+    return coarse;
+  }
+
+  private static boolean[] all(int count) {
+    boolean[] all = new boolean[count];
+    Arrays.fill(all, true);
+    return all;
+  }
+
+  /** Distance of a point from a segment of a straight line. */
+  private static double distance(Vector3 point, Vector3 start, Vector3 end) {
+    Vector3 chord = end.minus(start);
+    Vector3 offset = point.minus(start);
+    double length = chord.dot(chord);
+    double along = length > 0 ? Math.max(0, Math.min(1, offset.dot(chord) / length)) : 0;
+    return offset.minus(chord.times(along)).norm();
+  }
+
+  /** Moves the middles across their segments onto the curve; tells which could be moved. */
+  private boolean[] onCurve(List<Integer> open, double[][] middle) {
+    int n = open.size();
+    boolean[] found = new boolean[n];
+    double[][] inside = new double[2][n];
+    double[][] outside = new double[2][n];
+    for (double bracket : BRACKETS) {
+      double[][] left = aside(open, middle, bracket);
+      double[][] right = aside(open, middle, -bracket);
+      boolean[] leftKept = region.kept(left[0], left[1]);
+      boolean[] rightKept = region.kept(right[0], right[1]);
+      for (int i = 0; i < n; i++) {
+        if (!found[i] && leftKept[i] && !rightKept[i]) {
+          found[i] = true;
+          for (int k = 0; k < 2; k++) {
+            inside[k][i] = left[k][i];
+            outside[k][i] = right[k][i];
+          }
+        }
+      }
+    }
+    region.bisect(inside, outside);
+    for (int i = 0; i < n; i++) {
+      middle[0][i] = inside[0][i];
+      middle[1][i] = inside[1][i];
+    }
+    return found;
+  }
+
+  /** Points to the left of the middles, by a part of each segment's length, within the square. */
+  private double[][] aside(List<Integer> open, double[][] middle, double part) {
+    double[][] moved = new double[2][open.size()];
+    for (int i = 0; i < open.size(); i++) {
+      Node start = nodes.get(open.get(i));
+      Node end = nodes.get(start.next);
+      moved[0][i] = KeptRegion.inset(middle[0][i] - part * (end.v - start.v));
+      moved[1][i] = KeptRegion.inset(middle[1][i] + part * (end.u - start.u));
+    }
+    return moved;
+  }
+}
