@@ -18,13 +18,14 @@ final class PointTally {
    *
    * @param front number of crossings on the side to which the normal points
    * @param back number on the other
+   * @param here number of other patches that pass through the point itself
    */
-  void enter(int front, int back) {
+  void enter(int front, int back, int here) {
     boolean oddFront = front % 2 == 1;
     boolean oddBack = back % 2 == 1;
     frontOdd += oddFront ? 1 : 0;
     backOdd += oddBack ? 1 : 0;
-    if (oddFront == oddBack) {
+    if (oddFront == oddBack || here > 0) {
       alike++;
     } else if (oddBack) {
       out++;

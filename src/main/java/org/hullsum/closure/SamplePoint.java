@@ -1,0 +1,11 @@
+package org.hullsum.closure;
+
+import org.hullsum.numeric.Vector3;
+
+/**
+ * A point of a surface.
+ *
+ * @param position r
+ * @param normal the construction normal, of length one
+ */
+record SamplePoint(Vector3 position, Vector3 normal) {}
