@@ -44,13 +44,29 @@ final class QuantityCursor {
     return true;
   }
 
-  /** Takes a word if it stands here. */
-  boolean skip(String word) {
-    if (text.startsWith(word, position)) {
-      position += word.length();
+  /** Whether the text ends here. */
+  boolean isDone() {
+    return position >= text.length();
+  }
+
+  /** Takes signs if they stand here. */
+  boolean skip(String signs) {
+    if (text.startsWith(signs, position)) {
+      position += signs.length();
       return true;
     }
     return false;
+  }
+
+  /** Takes a word if it stands here whole. */
+  boolean skipWord(String word) {
+    return atWord(word) && skip(word);
+  }
+
+  private boolean atWord(String word) {
+    int end = position + word.length();
+    return text.startsWith(word, position)
+        && (end >= text.length() || !Character.isLetterOrDigit(text.charAt(end)));
   }
 
   double number() throws TextFault {
@@ -64,7 +80,11 @@ final class QuantityCursor {
     int here = position;
     skipBlanks();
     boolean follows =
-        position < text.length() && !startsUncertainty(position) && !startsMeaning(position);
+        !isDone()
+            && !startsUncertainty(position)
+            && peek() != '('
+            && !atWord("of")
+            && !atWord("absolute");
     position = here;
     return follows;
   }
@@ -72,9 +92,9 @@ final class QuantityCursor {
   /**
    * Reads the blank after a number and the unit behind it.
    *
-   * @param onlyAngles whether the case has no units, and so none but {@code deg} and {@code rad}
+   * @param rule which units the case takes here
    */
-  Noted<Unit> unit(boolean onlyAngles) throws TextFault {
+  Noted<Unit> unit(UnitRule rule) throws TextFault {
     int afterNumber = position;
     skipBlanks();
     int start = position;
@@ -89,7 +109,7 @@ final class QuantityCursor {
     } catch (TextFault inUnit) {
       throw inUnit.shifted(start);
     }
-    if (onlyAngles && !code.equals("deg") && !code.equals("rad")) {
+    if (!rule.allows(unit.value())) {
       throw new TextFault(
           ProblemKind.UNIT,
           start,
@@ -119,11 +139,6 @@ final class QuantityCursor {
 
   private boolean startsUncertainty(int index) {
     return text.startsWith("±", index) || text.startsWith("+/-", index);
-  }
-
-  /** Whether a parenthesis follows that is a meaning and not the beginning of a unit. */
-  private boolean startsMeaning(int index) {
-    return text.charAt(index) == '(';
   }
 
   /** The fault of text that is left over. */

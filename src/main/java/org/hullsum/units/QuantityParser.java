@@ -24,15 +24,15 @@ public final class QuantityParser {
 
   /** As {@link #parse(String, WorkingUnits)}, with the notes of the unit. */
   public static Noted<Quantity> parseWithNotes(String text, WorkingUnits working) throws TextFault {
-    return parse(text, working.none());
+    return parse(text, UnitRule.ofValues(working));
   }
 
   /** As {@link #parse(String)}, with the notes of the unit. */
   public static Noted<Quantity> parseWithNotes(String text) throws TextFault {
-    return parse(text, false);
+    return parse(text, UnitRule.ANY);
   }
 
-  private static Noted<Quantity> parse(String text, boolean onlyAngles) throws TextFault {
+  private static Noted<Quantity> parse(String text, UnitRule rule) throws TextFault {
     Objects.requireNonNull(text, "text");
     QuantityCursor cursor = new QuantityCursor(text);
     cursor.skipBlanks();
@@ -40,7 +40,7 @@ public final class QuantityParser {
     if (cursor.atEnd()) {
       return new Noted<>(new Quantity(value, Unit.ONE, true), List.of());
     }
-    Noted<Unit> unit = cursor.unit(onlyAngles);
+    Noted<Unit> unit = cursor.unit(rule);
     if (!cursor.atEnd()) {
       throw cursor.trailing();
     }

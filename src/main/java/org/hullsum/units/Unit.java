@@ -34,6 +34,17 @@ public record Unit(String code, Dimension dimension, double scale, double offset
     return (value - offset) / scale;
   }
 
+  /**
+   * Whether this is a share, as {@code %} and {@code ppm} are: after ± it may be a part of the
+   * value.
+   */
+  public boolean isRatio() {
+    return switch (code) {
+      case "%", "‰", "ppm", "ppb", "[ppth]", "[ppm]", "[ppb]", "[pptr]" -> true;
+      default -> false;
+    };
+  }
+
   /** This unit for differences: the same without its offset. */
   public Unit difference() {
     return offset == 0 ? this : new Unit(code, dimension, scale, 0);
