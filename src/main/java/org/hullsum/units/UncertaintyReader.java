@@ -76,12 +76,12 @@ final class UncertaintyReader {
     Optional<Unit> unit = unit();
     cursor.skipBlanks();
     UncertaintyTerm.Reference reference = reference();
-    int end = cursor.position();
+    int end = start + cursor.text().substring(start, cursor.position()).stripTrailing().length();
     cursor.skipBlanks();
     UncertaintyMeaningReader.Stated stated = UncertaintyMeaningReader.parenthesis(cursor);
     Optional<UncertaintyMeaning> meaning = stated.meaning().or(() -> fallback);
     if (meaning.isEmpty()) {
-      String term = cursor.text().substring(start, end).strip();
+      String term = cursor.text().substring(start, end);
       throw fault(
           start,
           end,

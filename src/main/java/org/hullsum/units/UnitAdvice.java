@@ -28,6 +28,7 @@ final class UnitAdvice {
           case '^' -> "expected a whole exponent after '^'";
           case ' ', '\t', '\u00a0' -> "a unit holds no blanks; write it in one piece, such as m3/h";
           case '[' -> "this '[' is never closed";
+          case '(' -> "expected an operator before '(', or a blank where the unit ends";
           case ')' -> "expected a unit before ')'";
           case '-', '+', '−' -> "a sign stands only before the digits of an exponent";
           default ->
