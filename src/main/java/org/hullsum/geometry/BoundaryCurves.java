@@ -14,11 +14,11 @@ import java.util.Map;
  * sides are boundary where only one of the two is kept.
  *
  * <p>Every point is on the boundary to rounding; the distance of the curve from the polyline stays
- * within the tolerance, as far as it can be judged at the middle and the quarters of each piece.
+ * within the tolerance, as far as it can be judged at the middle of each piece.
  */
 public final class BoundaryCurves {
-  /** Distance within which ends of curves are one point, relative to the tolerance asked for. */
-  private static final double JOINT = 0.1;
+  /** Distance within which ends of curves are one point, relative to the surface's extent. */
+  private static final double JOINT = 1e-7;
 
   private BoundaryCurves() {}
 
@@ -33,8 +33,9 @@ public final class BoundaryCurves {
     if (!(tolerance > 0)) {
       throw new IllegalArgumentException("tolerance " + tolerance);
     }
+    double joint = JOINT * Extent.of(surface, parameters);
     List<BoundaryPiece> pieces = new ArrayList<>();
-    GluedSides glued = new GluedSides(JOINT * tolerance);
+    GluedSides glued = new GluedSides(joint);
     for (int i = 0; i < surface.charts().size(); i++) {
       Chart chart = surface.charts().get(i);
       BoundaryTracer tracer = new BoundaryTracer(i, chart, surface.trimOn(chart), parameters);
@@ -45,6 +46,6 @@ public final class BoundaryCurves {
       }
     }
     pieces.addAll(glued.unmatched());
-    return new PieceChain(pieces, JOINT * tolerance).curves();
+    return new PieceChain(pieces, joint).curves();
   }
 }

@@ -1,11 +1,8 @@
 package org.hullsum.geometry;
 
-import java.util.ArrayList;
-import java.util.List;
 import java.util.Map;
 import org.hullsum.expression.IntervalEvaluator;
 import org.hullsum.numeric.Interval;
-import org.hullsum.numeric.Vector3;
 
 /** A chart compiled for enclosures, with its tree of cells. Thread-safe. */
 final class ChartCells {
@@ -38,15 +35,5 @@ final class ChartCells {
 
   TrimPoint trimPoint() {
     return new TrimPoint(trim);
-  }
-
-  List<Vector3> positions(double[][] at) {
-    double[][] r = new double[3][at[0].length];
-    points.positions(at, at[0].length, r, points.workspace());
-    List<Vector3> positions = new ArrayList<>();
-    for (int i = 0; i < at[0].length; i++) {
-      positions.add(new Vector3(r[0][i], r[1][i], r[2][i]));
-    }
-    return positions;
   }
 }

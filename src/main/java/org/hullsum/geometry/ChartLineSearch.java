@@ -145,7 +145,7 @@ final class ChartLineSearch {
     if (!(Math.max(Math.abs(missA), Math.abs(missB)) <= line.reach())) {
       return Outcome.OPEN;
     }
-    if (sideDistance(u, v, at) <= 4 * line.reach()) {
+    if (at.sideDistance(u, v) <= 4 * line.reach()) {
       raise(Doubt.NEAR_SIDE);
       take(u, v, at, true);
       return Outcome.SETTLED;
@@ -169,14 +169,6 @@ final class ChartLineSearch {
     double inU = Math.min(u, 1 - u) / cell.halfU();
     double inV = Math.min(v, 1 - v) / cell.halfV();
     return Math.min(PROOF_BOX, Math.min(inU, inV));
-  }
-
-  /** Distance along the surface to the nearest side of the square. */
-  private static double sideDistance(double u, double v, ChartPoint at) {
-    double area = at.areaVector().norm();
-    double fromU = Math.min(u, 1 - u) * area / at.tangentV().norm();
-    double fromV = Math.min(v, 1 - v) * area / at.tangentU().norm();
-    return Double.isNaN(fromU) || Double.isNaN(fromV) ? 0 : Math.min(fromU, fromV);
   }
 
   private void take(double u, double v, ChartPoint at, boolean nearSide) {

@@ -12,8 +12,10 @@ import org.hullsum.numeric.Vector3;
 final class CurveRefiner {
   private static final int MOST_ROUNDS = 24;
 
-  /** How far to both sides of a segment the curve is sought, relative to its length. */
-  private static final double[] BRACKETS = {0.05, 0.25, 1.0};
+  /** Where across a segment the curve is sought, to its left, relative to its length. */
+  private static final double[] ACROSS = {
+    -1, -0.7, -0.45, -0.25, -0.1, -0.03, 0.03, 0.1, 0.25, 0.45, 0.7, 1
+  };
 
   private final int chart;
   private final ChartEvaluator evaluator;
@@ -74,16 +76,19 @@ final class CurveRefiner {
   private int add(double u, double v, int next) {
     double sideU = KeptRegion.onSide(u);
     double sideV = KeptRegion.onSide(v);
-    Vector3 position = evaluator.at(sideU, sideV, workspace).position();
-    if (!position.isFinite()) {
-      position =
-          evaluator.at(KeptRegion.inset(sideU), KeptRegion.inset(sideV), workspace).position();
-    }
-    nodes.add(new Node(sideU, sideV, position, next));
+    nodes.add(new Node(sideU, sideV, position(sideU, sideV), next));
     return nodes.size() - 1;
   }
 
-  /** Inserts the middle of each segment; the halves of those that were too coarse. */
+  /** The position; a little inside the square where the formula is undefined on a side. */
+  private Vector3 position(double u, double v) {
+    Vector3 position = evaluator.at(u, v, workspace).position();
+    return position.isFinite()
+        ? position
+        : evaluator.at(KeptRegion.inset(u), KeptRegion.inset(v), workspace).position();
+  }
+
+  /** Inserts the middles of segments that are too coarse; their halves. */
   private List<Integer> halved(List<Integer> open, boolean onTrim, double tolerance) {
     double[][] middle = new double[2][open.size()];
     for (int i = 0; i < open.size(); i++) {
@@ -100,11 +105,12 @@ final class CurveRefiner {
       }
       Node start = nodes.get(open.get(i));
       Node end = nodes.get(start.next);
-      int added = add(middle[0][i], middle[1][i], start.next);
-      start.next = added;
-      if (distance(nodes.get(added).position, start.position, end.position) > tolerance) {
+      Vector3 position = position(middle[0][i], middle[1][i]);
+      if (distance(position, start.position, end.position) > tolerance) {
+        nodes.add(new Node(middle[0][i], middle[1][i], position, start.next));
+        start.next = nodes.size() - 1;
         coarse.add(open.get(i));
-        coarse.add(added);
+        coarse.add(start.next);
       }
     }
     return coarse;
@@ -129,22 +135,28 @@ final class CurveRefiner {
   private boolean[] onCurve(List<Integer> open, double[][] middle) {
     int n = open.size();
     boolean[] found = new boolean[n];
+    double[] nearest = new double[n];
+    Arrays.fill(nearest, Double.POSITIVE_INFINITY);
     double[][] inside = new double[2][n];
     double[][] outside = new double[2][n];
-    for (double bracket : BRACKETS) {
-      double[][] left = aside(open, middle, bracket);
-      double[][] right = aside(open, middle, -bracket);
+    double[][] right = aside(open, middle, ACROSS[0]);
+    boolean[] rightKept = region.kept(right[0], right[1]);
+    for (int k = 1; k < ACROSS.length; k++) {
+      double[][] left = aside(open, middle, ACROSS[k]);
       boolean[] leftKept = region.kept(left[0], left[1]);
-      boolean[] rightKept = region.kept(right[0], right[1]);
+      double away = Math.abs(ACROSS[k - 1] + ACROSS[k]);
       for (int i = 0; i < n; i++) {
-        if (!found[i] && leftKept[i] && !rightKept[i]) {
+        if (leftKept[i] && !rightKept[i] && away < nearest[i]) {
           found[i] = true;
-          for (int k = 0; k < 2; k++) {
-            inside[k][i] = left[k][i];
-            outside[k][i] = right[k][i];
+          nearest[i] = away;
+          for (int row = 0; row < 2; row++) {
+            inside[row][i] = left[row][i];
+            outside[row][i] = right[row][i];
           }
         }
       }
+      right = left;
+      rightKept = leftKept;
     }
     region.bisect(inside, outside);
     for (int i = 0; i < n; i++) {

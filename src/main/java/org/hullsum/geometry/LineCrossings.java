@@ -33,9 +33,6 @@ public final class LineCrossings {
   /** Rounding of positions far from the surface, relative to the distance. */
   private static final double ROUNDING = 1e-14;
 
-  /** Points along each direction from which the extent is taken. */
-  private static final int SAMPLES = 9;
-
   private final Surface surface;
   private final List<ChartCells> charts;
   private final double extent;
@@ -67,24 +64,7 @@ public final class LineCrossings {
   public static LineCrossings of(Surface surface, Map<String, Double> parameters) {
     List<ChartCells> charts =
         surface.charts().stream().map(chart -> ChartCells.of(surface, chart, parameters)).toList();
-    return new LineCrossings(surface, charts, extent(charts));
-  }
-
-  /** Largest distance of sampled positions from the first of them, twice. */
-  private static double extent(List<ChartCells> charts) {
-    double[][] at = ChartSamples.grid(SAMPLES);
-    Optional<Vector3> first = Optional.empty();
-    double largest = 0;
-    for (ChartCells cells : charts) {
-      for (Vector3 position : cells.positions(at)) {
-        if (position.isFinite()) {
-          Vector3 origin = first.orElse(position);
-          first = Optional.of(origin);
-          largest = Math.max(largest, position.minus(origin).norm());
-        }
-      }
-    }
-    return 2 * largest;
+    return new LineCrossings(surface, charts, Extent.of(surface, parameters));
   }
 
   public Surface surface() {

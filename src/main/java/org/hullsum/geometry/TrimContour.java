@@ -14,12 +14,16 @@ import org.hullsum.numeric.Interval;
  *
  * <p>The grid is halved until every undecided cell is close to one in which a curve was found, so
  * that a small opening is not missed between grid points; or until it has {@link #MOST_CELLS}
- * undecided cells or 2^{@link #DEEPEST} cells a side.
+ * undecided cells or 2^{@link #DEEPEST} cells a side. A curve too small for its cells is followed
+ * on a finer grid.
  */
 final class TrimContour {
   private static final int SHALLOWEST = 6;
   private static final int DEEPEST = 12;
   private static final int MOST_CELLS = 20_000;
+
+  /** Fewer undecided cells than this follow a small curve too coarsely. */
+  private static final int FEWEST_CELLS = 200;
 
   /** How far from a curve's cells enclosures may leave a cell undecided, in cells. */
   private static final int LOOSENESS = 3;
@@ -77,7 +81,8 @@ final class TrimContour {
 
   private void refine() {
     while (level < DEEPEST && cells.size() <= MOST_CELLS) {
-      if (level >= SHALLOWEST && isResolved()) {
+      boolean enough = cells.isEmpty() || cells.size() >= FEWEST_CELLS;
+      if (level >= SHALLOWEST && enough && isResolved()) {
         return;
       }
       level++;

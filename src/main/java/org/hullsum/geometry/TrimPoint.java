@@ -66,19 +66,43 @@ final class TrimPoint {
    * @param reach distance along the surface that counts as near
    */
   Standing at(double u, double v, ChartPoint at, double reach) {
-    if (workspace.isEmpty()) {
-      return Standing.KEPT;
+    if (distance(u, v, at) <= reach) {
+      return Standing.NEAR_CURVE;
     }
-    point[0][0] = u;
-    point[1][0] = v;
-    compiled.evaluator().orElseThrow().evaluate(point, 1, values, workspace.get());
+    return holds() ? Standing.KEPT : Standing.CUT_AWAY;
+  }
+
+  /** Whether the condition holds. */
+  boolean keeps(double u, double v) {
+    evaluate(u, v);
+    return holds();
+  }
+
+  private boolean holds() {
+    return values.length == 0 || values[0][0] != 0;
+  }
+
+  /**
+   * Distance along the surface to the nearest curve on which a condition may change, to first
+   * order; 0 where it can't be told.
+   */
+  double distance(double u, double v, ChartPoint at) {
+    evaluate(u, v);
+    double nearest = Double.POSITIVE_INFINITY;
     for (int k = 1; k < values.length; k += 3) {
       double slope = slope(values[k + 1][0], values[k + 2][0], at);
-      if (!(Math.abs(values[k][0]) > reach * slope) && slope != 0) {
-        return Standing.NEAR_CURVE;
-      }
+      double distance = slope == 0 ? nearest : Math.abs(values[k][0]) / slope;
+      nearest = Double.isNaN(distance) ? 0 : Math.min(nearest, distance);
     }
-    return values[0][0] != 0 ? Standing.KEPT : Standing.CUT_AWAY;
+    return nearest;
+  }
+
+  private void evaluate(double u, double v) {
+    if (workspace.isPresent()) {
+      point[0][0] = u;
+      point[1][0] = v;
+      compiled.evaluator().orElseThrow().evaluate(point, 1, values, workspace.get());
+    }
   }
 
   /** Length of the gradient along the surface: |g_u (r_v × n) + g_v (n × r_u)| / |n|². */

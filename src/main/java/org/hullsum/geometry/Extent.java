@@ -1,0 +1,35 @@
+package org.hullsum.geometry;
+
+import java.util.Map;
+import java.util.Optional;
+import org.hullsum.numeric.Vector3;
+
+/** How large a surface is, untrimmed: what tolerances are relative to. */
+final class Extent {
+  /** Points along each direction of a chart. */
+  private static final int SAMPLES = 9;
+
+  private Extent() {}
+
+  /** Twice the largest distance of sampled positions from the first of them. */
+  static double of(Surface surface, Map<String, Double> parameters) {
+    double[][] at = ChartSamples.grid(SAMPLES);
+    int count = at[0].length;
+    Optional<Vector3> first = Optional.empty();
+    double largest = 0;
+    for (Chart chart : surface.charts()) {
+      ChartEvaluator evaluator = ChartEvaluator.of(chart, parameters);
+      double[][] r = new double[3][count];
+      evaluator.positions(at, count, r, evaluator.workspace());
+      for (int i = 0; i < count; i++) {
+        Vector3 position = new Vector3(r[0][i], r[1][i], r[2][i]);
+        if (position.isFinite()) {
+          Vector3 origin = first.orElse(position);
+          first = Optional.of(origin);
+          largest = Math.max(largest, position.minus(origin).norm());
+        }
+      }
+    }
+    return 2 * largest;
+  }
+}
