@@ -20,7 +20,9 @@ import org.hullsum.numeric.Vector3;
  * @param bare the name of a patch without surface, where there is one
  * @param bounded whether any patch leaves or enters it
  * @param facings of the patches, in their order; empty where there are none
- * @param closure with the facings found, or towards which they lean; empty where one has neither
+ * @param signs of the construction normals, +1 outward, as found or leaned to; empty where one is
+ *     neither
+ * @param closure with those signs
  * @param open whether the necessary conditions fail: with the facings found, or with any
  */
 record SurfaceAudit(
@@ -29,12 +31,14 @@ record SurfaceAudit(
     Optional<String> bare,
     boolean bounded,
     Optional<VolumeFacings> facings,
+    Optional<List<Integer>> signs,
     Optional<MomentClosure> closure,
     boolean open) {
   SurfaceAudit {
     Objects.requireNonNull(volume, "volume");
     Objects.requireNonNull(bare, "bare");
     Objects.requireNonNull(facings, "facings");
+    signs = signs.map(List::copyOf);
     Objects.requireNonNull(closure, "closure");
     patches = List.copyOf(patches);
   }
@@ -92,17 +96,16 @@ record SurfaceAudit(
                             + found.reason().get().words()));
   }
 
-  /** The boundary with the facings found. */
+  /** The boundary with the facings found, or leaned to. */
   List<BoundaryPatch> boundary() {
     List<BoundaryPatch> boundary = new ArrayList<>();
-    List<FoundFacing> found = facings.orElseThrow().facings();
     for (int i = 0; i < patches.size(); i++) {
       PatchAudit patch = patches.get(i);
       boundary.add(
           new BoundaryPatch(
               patch.surface().orElseThrow(),
               patch.geometry().orElseThrow(),
-              found.get(i).side().sign()));
+              signs.orElseThrow().get(i)));
     }
     return boundary;
   }
@@ -148,7 +151,7 @@ record SurfaceAudit(
       return "not applicable: `" + bare.get() + "` has no surface";
     }
     if (open) {
-      return "open: ∬ n dS and ∬ r⊗n dS do not have the values that every closed surface has";
+      return "∬ n dS and ∬ r⊗n dS do not have the values that every closed surface has";
     }
     return "closedness not proved: "
         + undeterminedReason()

@@ -46,18 +46,27 @@ final class SurfaceInspection {
     }
     if (surfaced.isEmpty()) {
       return new SurfaceAudit(
-          volume, surfaced, bare, bounded, Optional.empty(), Optional.empty(), false);
+          volume,
+          surfaced,
+          bare,
+          bounded,
+          Optional.empty(),
+          Optional.empty(),
+          Optional.empty(),
+          false);
     }
     VolumeFacings facings =
         finder.find(surfaced.stream().map(p -> p.patch().surface().orElseThrow()).toList());
     List<SurfaceMoments> moments = surfaced.stream().map(SurfaceInspection::moments).toList();
+    Optional<List<Integer>> signs = signs(facings);
     Optional<MomentClosure> closure =
-        signs(facings).map(s -> MomentClosure.of(moments, s, MomentClosure.USUAL_SLACK));
+        signs.map(s -> MomentClosure.of(moments, s, MomentClosure.USUAL_SLACK));
     boolean open =
         facings.determined()
             ? closure.filter(c -> !c.holds()).isPresent()
             : MomentClosure.failsForEverySign(moments, MomentClosure.USUAL_SLACK).orElse(false);
-    return new SurfaceAudit(volume, surfaced, bare, bounded, Optional.of(facings), closure, open);
+    return new SurfaceAudit(
+        volume, surfaced, bare, bounded, Optional.of(facings), signs, closure, open);
   }
 
   private static boolean touches(Patch patch, String volume) {
