@@ -30,6 +30,9 @@ import org.hullsum.problem.InternalFault;
  * that area, which is exact for a field that is linear over the gap whatever the outline.
  */
 final class GapIntegration {
+  /** What the gap's unknown outline and the error of its moments may do, of the throughput. */
+  private static final double GAP_ERROR = 1e-6;
+
   private final InputSensitivity inputs;
   private final FluxIntegrator fluxes;
   private final VolumeIntegrator volumes;
@@ -58,6 +61,26 @@ final class GapIntegration {
     GapAudit {
       outward = List.copyOf(outward);
       divergence = List.copyOf(divergence);
+    }
+
+    /** For the explanation of one balance; the residual then, with the gap closed by the disk. */
+    Clues.Gap clue(BalanceSheet.Drawn drawn, int index, Scales scales) {
+      Balance balance = drawn.balances().get(index);
+      Estimate flux = drawn.at(index, outward);
+      Estimate made = drawn.at(index, divergence);
+      boolean identity = balance.subject().check() == BalanceResult.Check.IDENTITY;
+      Optional<Double> then =
+          identity
+              ? balance.result().outward().map(o -> o + flux.value() - made.value())
+              : balance.residual().map(r -> r.value() + flux.value());
+      double slack = flux.error() + (identity ? made.error() : 0);
+      return new Clues.Gap(
+          scales.point(gap.centre()),
+          scales.area(gap.vectorArea().norm()),
+          List.of(),
+          Optional.of(flux.value()),
+          then,
+          slack + GAP_ERROR * balance.result().throughput());
     }
   }
 
