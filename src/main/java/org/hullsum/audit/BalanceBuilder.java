@@ -194,8 +194,12 @@ final class BalanceBuilder {
             interior.flatMap(this::closing),
             divergence,
             conclusion.verdict(),
-            conclusion.reason());
+            sentence(conclusion.reason()));
     return new Balance(subject, rates, residual, decision, result);
+  }
+
+  private static String sentence(String reason) {
+    return Character.toUpperCase(reason.charAt(0)) + reason.substring(1) + ".";
   }
 
   private Estimate difference(Estimate outward, Estimate interior) {

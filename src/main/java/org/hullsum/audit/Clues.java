@@ -15,7 +15,7 @@ import org.hullsum.numeric.Vector3;
  * @param open volumes whose surface was proved open
  * @param surfaceless volumes with a patch without surface, of whose closedness nothing can be said
  * @param gaps by volume or envelope
- * @param fields by volume or envelope, where a field gives the fluxes
+ * @param fields the names of the fields that give every flux, by volume or envelope
  */
 record Clues(
     Set<String> inward,
@@ -24,7 +24,7 @@ record Clues(
     Set<String> open,
     Set<String> surfaceless,
     Map<String, Gap> gaps,
-    Map<String, Field> fields) {
+    Map<String, List<String>> fields) {
   /** Nothing known. */
   static final Clues NONE =
       new Clues(Set.of(), Set.of(), List.of(), Set.of(), Set.of(), Map.of(), Map.of());
@@ -49,28 +49,17 @@ record Clues(
    * @param between the patches at its rim, where they are known
    * @param flux outward through a plane disk over it
    * @param residualThen the residual of the balance with that flux; empty where it can't be said
+   * @param slack numerical error of the flux
    */
   record Gap(
       Vector3 centre,
       double area,
       List<String> between,
       Optional<Double> flux,
-      Optional<Double> residualThen) {
+      Optional<Double> residualThen,
+      double slack) {
     Gap {
       between = List.copyOf(between);
-    }
-  }
-
-  /**
-   * The field that gives every flux of a conservation check.
-   *
-   * @param names of the fields
-   * @param makes the volume integral of the divergence
-   * @param error a bound on it
-   */
-  record Field(List<String> names, double makes, double error) {
-    Field {
-      names = List.copyOf(names);
     }
   }
 

@@ -84,7 +84,7 @@ final class Explainer {
                     g.between(),
                     Optional.of(g.area()),
                     g.residualThen().get(),
-                    0,
+                    g.slack(),
                     "The surface has an opening of area "
                         + Figures.text(g.area())
                         + " around "
@@ -99,29 +99,30 @@ final class Explainer {
    * left over is made by the field itself.
    */
   private Optional<Hypothesis> makesSource(Balance balance, double residual) {
-    Clues.Field field = clues.fields().get(balance.subject().name());
-    if (field == null || balance.result().check() == BalanceResult.Check.IDENTITY) {
+    List<String> fields = clues.fields().getOrDefault(balance.subject().name(), List.of());
+    Optional<BalanceResult.Term> beside = balance.result().divergence();
+    if (fields.isEmpty() || beside.flatMap(BalanceResult.Term::value).isEmpty()) {
       return Optional.empty();
     }
+    double makes = beside.get().value().get();
     double stated = balance.result().interior().orElse(0.0);
     String unit = balance.result().unit();
-    String names = String.join("`, `", field.names());
     String message =
         "The divergence of `"
-            + names
+            + String.join("`, `", fields)
             + "` makes "
-            + Figures.text(field.makes(), unit)
+            + Figures.text(makes, unit)
             + " inside, where the case states "
             + Figures.text(stated, unit)
-            + ": the surface is right, the field does not conserve.";
+            + ".";
     return Optional.of(
         new Hypothesis(
             Explanation.Kind.FIELD_MAKES_SOURCE,
             Hypothesis.SHOWN,
-            field.names(),
+            fields,
             Optional.empty(),
-            residual + stated - field.makes(),
-            field.error(),
+            residual + stated - makes,
+            beside.get().numericalError().orElse(0.0),
             message));
   }
 

@@ -37,6 +37,21 @@ record InteriorRate(
     }
   }
 
+  /** The sum over the volumes of an envelope, each with a value. */
+  static InteriorRate sum(String envelope, List<InteriorRate> rates) {
+    InteriorRate first = rates.get(0);
+    boolean alike = rates.stream().allMatch(r -> r.formula.equals(first.formula));
+    return new InteriorRate(
+        envelope,
+        first.kind,
+        Optional.of(Estimate.sum(rates.stream().map(r -> r.value.orElseThrow()).toList())),
+        rates.stream().mapToDouble(InteriorRate::magnitude).sum(),
+        rates.stream().allMatch(InteriorRate::accurate),
+        first.route,
+        alike ? first.formula : Optional.empty(),
+        Optional.empty());
+  }
+
   /** The mean of one term's rates at the instants of an interval. */
   static InteriorRate mean(List<InteriorRate> rates, TimeMean mean) {
     InteriorRate first = rates.get(0);

@@ -196,7 +196,7 @@ class BalanceBuilderTest {
             .draw()
             .result();
     assertEquals(Verdict.UNDECIDED, result.verdict());
-    assertEquals("the surface is open", result.reason());
+    assertEquals("The surface is open.", result.reason());
     assertEquals(Optional.empty(), result.residual());
     assertEquals(Optional.empty(), result.interior());
     assertEquals(-0.5, result.outward().orElseThrow(), 1e-15);

@@ -131,11 +131,26 @@ class ExplainerTest {
 
   @Test
   void fieldThatMakesTheResidualIsNamed() {
+    InteriorRate makes =
+        new InteriorRate(
+            "tank",
+            "divergence",
+            Optional.of(new Estimate(2, 1e-9, Map.of())),
+            2,
+            true,
+            "cones",
+            Optional.of("2*lift"),
+            Optional.empty());
     Balance balance =
-        drawn(
-            volume("tank"),
-            integrated("in", SURROUNDINGS, "tank", 10),
-            integrated("out", "tank", SURROUNDINGS, 12));
+        new BalanceBuilder(
+                volume("tank"),
+                List.of(
+                    integrated("in", SURROUNDINGS, "tank", 10),
+                    integrated("out", "tank", SURROUNDINGS, 12)),
+                BalanceFixture.EXACT,
+                BalanceFixture.NAMES)
+            .beside(makes)
+            .draw();
     Clues clues =
         new Clues(
             Set.of(),
@@ -144,7 +159,7 @@ class ExplainerTest {
             Set.of(),
             Set.of(),
             Map.of(),
-            Map.of("tank", new Clues.Field(List.of("flow"), 2, 1e-9)));
+            Map.of("tank", List.of("flow")));
     Explanation first = explain(clues, balance).get(0);
     assertEquals(Kind.FIELD_MAKES_SOURCE, first.kind());
     assertEquals(List.of("flow"), first.on());
@@ -172,7 +187,8 @@ class ExplainerTest {
                     0.25,
                     List.of("out"),
                     Optional.of(2.0),
-                    Optional.of(0.0))),
+                    Optional.of(0.0),
+                    0)),
             Map.of());
     Explanation first = explain(clues, balance).get(0);
     assertEquals(Kind.GAP, first.kind());

@@ -1,0 +1,249 @@
+package org.hullsum.audit;
+
+import java.util.ArrayList;
+import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import java.util.OptionalDouble;
+import java.util.Set;
+import org.hullsum.flux.InputSensitivity;
+import org.hullsum.model.Case;
+import org.hullsum.model.Envelope;
+import org.hullsum.model.Patch;
+import org.hullsum.model.Tolerances;
+import org.hullsum.model.Volume;
+import org.hullsum.problem.Place;
+
+/**
+ * One audit, step by step: patches are integrated, surfaces inspected, singularities looked for,
+ * interiors integrated, balances drawn, findings gathered, and what does not close is explained.
+ *
+ * <p>The work of each step is shared among threads by patch or volume; the results are taken in the
+ * order of the case.
+ */
+final class CaseAudit {
+  private final Case audited;
+  private final AuditOptions options;
+  private final Workers workers;
+  private final Scales scales;
+  private final InputSensitivity inputs;
+  private final List<OptionalDouble> instants;
+
+  CaseAudit(Case audited, AuditOptions options) {
+    this.audited = audited;
+    this.options = options;
+    this.workers = new Workers(options);
+    this.scales = Scales.of(audited);
+    this.inputs = InputSensitivity.of(audited.inputs());
+    List<Double> stated = audited.schedule().instants();
+    this.instants =
+        stated.isEmpty()
+            ? List.of(OptionalDouble.empty())
+            : stated.stream().map(OptionalDouble::of).toList();
+  }
+
+  CaseResult run(SurfaceInspection.Finder finder) {
+    List<PatchAudit> patches = integratePatches();
+    List<SurfaceAudit> surfaces = inspectSurfaces(patches, finder);
+    FacingAudit facings = new FacingAudit(patches, surfaces);
+    List<InteriorAudit> interiors = integrateInteriors(surfaces);
+    List<List<PatchRate>> rates = rates(patches);
+    BalanceSheet sheet = new BalanceSheet(audited, scales, rates, interiors);
+    List<BalanceSheet.Drawn> drawn =
+        Subjects.of(audited, surfaces, scales).stream().map(sheet::draw).toList();
+    Map<String, GapIntegration.GapAudit> gaps = integrateGaps(surfaces);
+    CaseFindings findings = new CaseFindings(scales);
+    gather(findings, patches, surfaces, facings, interiors, rates, drawn);
+    Explainer.Explanations explained = explain(patches, surfaces, facings, interiors, drawn, gaps);
+    List<BalanceResult> balances =
+        drawn.stream().flatMap(d -> d.balances().stream()).map(Balance::result).toList();
+    return new CaseResult(
+        audited.file(),
+        audited.title(),
+        audited.about(),
+        scales.lengthUnit(),
+        audited.warnings(),
+        audited.notes(),
+        balances,
+        new PatchReport(audited, scales, facings).results(patches),
+        surfaces.stream().map(s -> s.result(scales, gapFlux(gaps, s))).toList(),
+        Waivers.apply(findings.inOrder(), audited.waivers(), options.today()),
+        explained.explanations(),
+        explained.fitByChance(),
+        correctedCoverage(balances.size()));
+  }
+
+  private List<PatchAudit> integratePatches() {
+    PatchIntegration integration = new PatchIntegration(inputs, instants, options.digits());
+    List<Patch> patches = audited.patches();
+    return workers.map("patches", patches.size(), i -> integration.integrate(patches.get(i)));
+  }
+
+  private List<SurfaceAudit> inspectSurfaces(
+      List<PatchAudit> patches, SurfaceInspection.Finder finder) {
+    SurfaceInspection inspection = new SurfaceInspection(patches, finder);
+    List<Volume> volumes = audited.volumes();
+    return workers.map("surfaces", volumes.size(), i -> inspection.inspect(volumes.get(i)));
+  }
+
+  private List<InteriorAudit> integrateInteriors(List<SurfaceAudit> surfaces) {
+    InteriorIntegration integration =
+        new InteriorIntegration(inputs, instants, options.digits(), scales);
+    return workers.map(
+        "interiors",
+        surfaces.size(),
+        i -> {
+          SurfaceAudit surface = surfaces.get(i);
+          boolean identity = FieldUse.isIdentity(surface.volume(), audited.patches());
+          List<FieldUse.Carrier> carriers =
+              identity ? List.of() : FieldUse.common(surface.volume(), audited.patches());
+          return integration.integrate(surface, carriers, surface.noRegion());
+        });
+  }
+
+  private List<List<PatchRate>> rates(List<PatchAudit> patches) {
+    List<List<PatchRate>> rates = new ArrayList<>();
+    for (int i = 0; i < instants.size(); i++) {
+      int instant = i;
+      rates.add(
+          patches.stream().map(p -> p.rateAt(instant, scales.rate(), Optional.empty())).toList());
+    }
+    return rates;
+  }
+
+  private Map<String, GapIntegration.GapAudit> integrateGaps(List<SurfaceAudit> surfaces) {
+    GapIntegration integration = new GapIntegration(inputs, instants, options.digits(), scales);
+    Map<String, GapIntegration.GapAudit> gaps = new LinkedHashMap<>();
+    for (SurfaceAudit surface : surfaces) {
+      integration
+          .integrate(surface, FieldUse.likely(surface.volume(), audited.patches()))
+          .ifPresent(g -> gaps.put(surface.volume().name(), g));
+    }
+    return gaps;
+  }
+
+  private static Optional<Double> gapFlux(
+      Map<String, GapIntegration.GapAudit> gaps, SurfaceAudit surface) {
+    return Optional.ofNullable(gaps.get(surface.volume().name()))
+        .map(g -> g.outward().get(0).value());
+  }
+
+  private void gather(
+      CaseFindings findings,
+      List<PatchAudit> patches,
+      List<SurfaceAudit> surfaces,
+      FacingAudit facings,
+      List<InteriorAudit> interiors,
+      List<List<PatchRate>> rates,
+      List<BalanceSheet.Drawn> drawn) {
+    ClaimJudge judge = new ClaimJudge(audited.inputs(), scales.rateUnit());
+    for (int p = 0; p < patches.size(); p++) {
+      int patch = p;
+      findings.addPatch(patches.get(p), options.digits());
+      findings.addClaims(
+          patches.get(p),
+          rates.stream().map(r -> r.get(patch)).toList(),
+          tolerancesOf(patches.get(p).patch()),
+          judge);
+    }
+    findings.addAll(facings.findings(patches));
+    surfaces.forEach(findings::addSurface);
+    for (int v = 0; v < interiors.size(); v++) {
+      findings.addInterior(interiors.get(v), audited.volumes().get(v), options.digits());
+    }
+    Map<String, Patch> byName = new LinkedHashMap<>();
+    audited.patches().forEach(p -> byName.put(p.name(), p));
+    drawn.forEach(d -> findings.addBalances(d, placeOf(d.subject().name()), byName));
+  }
+
+  /** The tolerances of the volume that a patch leaves, else of the one that it enters. */
+  private Tolerances tolerancesOf(Patch patch) {
+    for (String name : List.of(patch.leaves(), patch.enters())) {
+      for (Volume volume : audited.volumes()) {
+        if (volume.name().equals(name)) {
+          return Subjects.scaled(volume.tolerances(), scales);
+        }
+      }
+    }
+    return Tolerances.NONE;
+  }
+
+  private Place placeOf(String subject) {
+    return audited.volumes().stream()
+        .filter(v -> v.name().equals(subject))
+        .map(Volume::place)
+        .findFirst()
+        .or(
+            () ->
+                audited.envelopes().stream()
+                    .filter(e -> e.name().equals(subject))
+                    .map(Envelope::place)
+                    .findFirst())
+        .orElseGet(() -> Place.wholeFile(audited.file()));
+  }
+
+  private Explainer.Explanations explain(
+      List<PatchAudit> patches,
+      List<SurfaceAudit> surfaces,
+      FacingAudit facings,
+      List<InteriorAudit> interiors,
+      List<BalanceSheet.Drawn> drawn,
+      Map<String, GapIntegration.GapAudit> gaps) {
+    Map<String, Clues.Gap> gapClues = new LinkedHashMap<>();
+    Map<String, List<String>> fields = new LinkedHashMap<>();
+    List<Balance> explained = new ArrayList<>();
+    for (BalanceSheet.Drawn d : drawn) {
+      int worst = d.worst();
+      explained.add(d.balances().get(worst));
+      GapIntegration.GapAudit gap = gaps.get(d.subject().name());
+      if (gap != null) {
+        gapClues.put(d.subject().name(), gap.clue(d, worst, scales));
+      }
+      fields.put(d.subject().name(), fieldsOf(d.subject(), interiors));
+    }
+    Set<String> surfaced = new LinkedHashSet<>();
+    patches.stream().filter(p -> p.surface().isPresent()).forEach(p -> surfaced.add(p.name()));
+    Set<String> open = new LinkedHashSet<>();
+    Set<String> surfaceless = new LinkedHashSet<>();
+    List<Clues.Overlap> overlaps = new ArrayList<>();
+    for (SurfaceAudit surface : surfaces) {
+      surface.openReason().ifPresent(reason -> open.add(surface.volume().name()));
+      surface.bare().ifPresent(b -> surfaceless.add(surface.volume().name()));
+      surface
+          .facings()
+          .ifPresent(
+              f ->
+                  f.overlaps()
+                      .forEach(
+                          o ->
+                              overlaps.add(
+                                  new Clues.Overlap(
+                                      surface.patches().get(o.first()).name(),
+                                      surface.patches().get(o.second()).name()))));
+    }
+    Clues clues =
+        new Clues(facings.inward(), surfaced, overlaps, open, surfaceless, gapClues, fields);
+    return new Explainer(clues).explain(explained);
+  }
+
+  private static List<String> fieldsOf(BalanceSubject subject, List<InteriorAudit> interiors) {
+    return interiors.stream()
+        .filter(i -> subject.members().contains(i.volume()))
+        .flatMap(i -> i.fields().stream())
+        .distinct()
+        .toList();
+  }
+
+  private Optional<Double> correctedCoverage(int balances) {
+    if (balances < 2) {
+      return Optional.empty();
+    }
+    double lowest = 1;
+    for (Volume volume : audited.volumes()) {
+      lowest = Math.min(lowest, volume.tolerances().coverage());
+    }
+    return Optional.of(Coverage.corrected(lowest, balances));
+  }
+}

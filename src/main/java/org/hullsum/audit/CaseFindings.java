@@ -1,0 +1,304 @@
+package org.hullsum.audit;
+
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Optional;
+import org.hullsum.closure.MomentClosure;
+import org.hullsum.closure.VolumeFacings;
+import org.hullsum.flux.PatchFlux;
+import org.hullsum.model.Claim;
+import org.hullsum.model.Patch;
+import org.hullsum.model.Tolerances;
+import org.hullsum.model.Volume;
+import org.hullsum.numeric.Vector3;
+import org.hullsum.problem.Finding;
+import org.hullsum.problem.FindingCode;
+import org.hullsum.problem.Place;
+import org.hullsum.problem.Severity;
+import org.hullsum.quadrature.Integral;
+
+/** The findings on patches, surfaces, interiors and balances. */
+final class CaseFindings {
+  private final Scales scales;
+  private final List<Finding> findings = new ArrayList<>();
+
+  CaseFindings(Scales scales) {
+    this.scales = scales;
+  }
+
+  /** In the order of the case; what has no place comes last. */
+  List<Finding> inOrder() {
+    Comparator<Finding> byPlace =
+        Comparator.comparingInt((Finding f) -> f.place().map(Place::line).orElse(Integer.MAX_VALUE))
+            .thenComparingInt(f -> f.place().map(Place::column).orElse(Integer.MAX_VALUE));
+    return findings.stream().sorted(byPlace).toList();
+  }
+
+  void addAll(List<Finding> others) {
+    others.forEach(this::add);
+  }
+
+  /** Each code once on each name: the first stands. */
+  private void add(Finding finding) {
+    boolean said =
+        findings.stream().anyMatch(f -> f.code() == finding.code() && f.on().equals(finding.on()));
+    if (!said) {
+      findings.add(finding);
+    }
+  }
+
+  private void add(
+      FindingCode code, String message, String on, Place place, Map<String, Object> evidence) {
+    add(Finding.of(code, message, on, Optional.of(place), evidence));
+  }
+
+  void addPatch(PatchAudit audit, int digits) {
+    Patch patch = audit.patch();
+    audit
+        .degenerate()
+        .ifPresent(
+            reason ->
+                add(
+                    FindingCode.PATCH_DEGENERATE,
+                    reason,
+                    patch.name(),
+                    audit.hasArea() ? patch.facingPlace() : patch.place(),
+                    Map.of()));
+    audit.fluxes().forEach(now -> now.forEach(flux -> addFlux(audit, flux, digits)));
+  }
+
+  private void addFlux(PatchAudit audit, PatchFlux flux, int digits) {
+    Patch patch = audit.patch();
+    if (flux.nonFiniteAt().isPresent()) {
+      Vector3 at = flux.nonFiniteAt().get();
+      add(
+          FindingCode.FIELD_UNDEFINED,
+          "what flows through `"
+              + patch.name()
+              + "` is not finite at "
+              + scales.place(at)
+              + ", a point of the patch",
+          patch.name(),
+          patch.place(),
+          Map.of("at", coordinates(scales.point(at))));
+    } else if (flux.status() == Integral.Status.NOT_REACHED) {
+      addAccuracy(
+          "the flux through `" + patch.name() + "`",
+          patch.name(),
+          patch.place(),
+          digits,
+          flux.errorBound() / flux.magnitude());
+    }
+  }
+
+  private void addAccuracy(String what, String on, Place place, int digits, double reached) {
+    Map<String, Object> evidence = new LinkedHashMap<>();
+    evidence.put("asked", Math.pow(10, -digits));
+    evidence.put("reached", reached);
+    add(
+        FindingCode.ACCURACY_NOT_REACHED,
+        what
+            + " is known to "
+            + Figures.text(reached)
+            + " of its magnitude, where 1e-"
+            + digits
+            + " was asked for; the error bound stands",
+        on,
+        place,
+        evidence);
+  }
+
+  static double[] coordinates(Vector3 point) {
+    return new double[] {point.x(), point.y(), point.z()};
+  }
+
+  void addClaims(PatchAudit audit, List<PatchRate> rates, Tolerances tolerances, ClaimJudge judge) {
+    for (int i = 0; i < rates.size(); i++) {
+      List<Claim> claims = audit.patch().claims();
+      for (int k = 0; k < claims.size(); k++) {
+        Optional<Estimate> flux = rates.get(i).total();
+        Optional<Estimate> claim = audit.claims().get(i).get(k).map(c -> c.times(scales.rate()));
+        if (flux.isPresent() && claim.isPresent()) {
+          judge
+              .judge(
+                  new ClaimJudge.Comparison(
+                      audit.name(), flux.get(), claim.get(), tolerances, claims.get(k).place()))
+              .ifPresent(this::add);
+        }
+      }
+    }
+  }
+
+  void addSurface(SurfaceAudit surface) {
+    Volume volume = surface.volume();
+    if (!surface.bounded()) {
+      add(
+          FindingCode.VOLUME_UNBOUNDED,
+          "no patch leaves or enters `" + volume.name() + "`",
+          volume.name(),
+          volume.place(),
+          Map.of());
+    }
+    surface.facings().ifPresent(f -> f.overlaps().forEach(o -> addOverlap(surface, o)));
+    boolean overlapping = surface.facings().filter(f -> !f.overlaps().isEmpty()).isPresent();
+    if (surface.openReason().isPresent() && !overlapping) {
+      addOpen(surface);
+    } else if (surface.bare().isEmpty() && !overlapping) {
+      surface.undeterminedReason().ifPresent(reason -> addUndetermined(surface, reason));
+    }
+  }
+
+  private void addOverlap(SurfaceAudit surface, VolumeFacings.Overlap overlap) {
+    String first = surface.patches().get(overlap.first()).name();
+    PatchAudit second = surface.patches().get(overlap.second());
+    Map<String, Object> evidence = new LinkedHashMap<>();
+    evidence.put("with", first);
+    evidence.put("at", coordinates(scales.point(overlap.place())));
+    add(
+        FindingCode.SURFACE_OVERLAP,
+        "`"
+            + second.name()
+            + "` lies on `"
+            + first
+            + "` around "
+            + scales.place(overlap.place())
+            + ": the same piece of surface is counted twice",
+        second.name(),
+        second.patch().place(),
+        evidence);
+  }
+
+  private void addOpen(SurfaceAudit surface) {
+    Map<String, Object> evidence = new LinkedHashMap<>();
+    surface
+        .closure()
+        .ifPresent(
+            c -> evidence.put("closureVector", coordinates(scales.vectorArea(c.closureVector()))));
+    String where = "";
+    if (surface.gap().isPresent()) {
+      MomentClosure.PlaneGap gap = surface.gap().get();
+      double area = scales.area(gap.vectorArea().norm());
+      evidence.put("gapCentre", coordinates(scales.point(gap.centre())));
+      evidence.put("gapArea", area);
+      where =
+          "; one plane opening of "
+              + Figures.text(area, scales.lengthUnit().equals("1") ? "1" : "m2")
+              + " around "
+              + scales.place(gap.centre())
+              + " would explain it";
+    }
+    add(
+        FindingCode.SURFACE_OPEN,
+        surface.openReason().orElseThrow() + where,
+        surface.volume().name(),
+        surface.volume().place(),
+        evidence);
+  }
+
+  /** Nothing is proved of such a surface, so it weighs less than one that is shown to be open. */
+  private void addUndetermined(SurfaceAudit surface, String reason) {
+    add(
+        Finding.of(
+                FindingCode.SURFACE_OPEN,
+                reason,
+                surface.volume().name(),
+                Optional.of(surface.volume().place()),
+                Map.of())
+            .weighing(Severity.WARNING));
+  }
+
+  void addInterior(InteriorAudit interior, Volume volume, int digits) {
+    for (InteriorAudit.Fault fault : interior.faults()) {
+      if (fault.nonFiniteAt().isPresent()) {
+        Vector3 at = fault.nonFiniteAt().get();
+        add(
+            FindingCode.FIELD_UNDEFINED,
+            "`"
+                + fault.formula()
+                + "` is not finite at "
+                + scales.place(at)
+                + ", where the interior of `"
+                + volume.name()
+                + "` is integrated",
+            volume.name(),
+            volume.place(),
+            Map.of("at", coordinates(scales.point(at))));
+      } else {
+        addAccuracy(
+            "the integral of `" + fault.formula() + "` over `" + volume.name() + "`",
+            volume.name(),
+            volume.place(),
+            digits,
+            fault.reached());
+      }
+    }
+  }
+
+  /** Notes and warnings on one volume's or envelope's balances. */
+  void addBalances(BalanceSheet.Drawn drawn, Place place, Map<String, Patch> patches) {
+    for (Balance balance : drawn.balances()) {
+      BalanceResult result = balance.result();
+      for (PatchRate rate : balance.rates()) {
+        if (rate.unknown() && balance.subject().signOf(rate) != 0) {
+          addUnknown(rate, result, patches.get(rate.patch()).place());
+        }
+      }
+      if (balance.decision().filter(Decision::tooCoarse).isPresent()) {
+        addCoarse(result, place);
+      }
+      if (balance.decision().filter(Decision::throughputZero).isPresent()) {
+        add(
+            FindingCode.THROUGHPUT_ZERO,
+            "nothing flows through `" + result.volume() + "` that could be told from zero",
+            result.volume(),
+            place,
+            Map.of("throughput", result.throughput()));
+      }
+    }
+  }
+
+  private void addUnknown(PatchRate rate, BalanceResult result, Place place) {
+    Map<String, Object> evidence = new LinkedHashMap<>();
+    result.closedBy().ifPresent(c -> evidence.put("closedBy", c.value()));
+    add(
+        FindingCode.FLUX_UNKNOWN,
+        "the flux through `"
+            + rate.patch()
+            + "` is not known"
+            + result
+                .closedBy()
+                .map(
+                    c ->
+                        "; "
+                            + Figures.text(c.value(), result.unit())
+                            + " would close `"
+                            + result.volume()
+                            + "`")
+                .orElse(""),
+        rate.patch(),
+        place,
+        evidence);
+  }
+
+  private void addCoarse(BalanceResult result, Place place) {
+    double detectable = result.detectable().orElseThrow();
+    Map<String, Object> evidence = new LinkedHashMap<>();
+    evidence.put("detectable", detectable);
+    evidence.put("throughput", result.throughput());
+    add(
+        FindingCode.TOO_COARSE_TO_TELL,
+        "an imbalance of `"
+            + result.volume()
+            + "` below "
+            + Figures.text(detectable, result.unit())
+            + " would go unseen, which is more than a tenth of what flows ("
+            + Figures.text(result.throughput(), result.unit())
+            + ")",
+        result.volume(),
+        place,
+        evidence);
+  }
+}

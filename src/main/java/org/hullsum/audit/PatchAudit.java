@@ -1,0 +1,114 @@
+package org.hullsum.audit;
+
+import java.util.ArrayList;
+import java.util.List;
+import java.util.Objects;
+import java.util.Optional;
+import org.hullsum.flux.FluxBasis;
+import org.hullsum.flux.PatchFlux;
+import org.hullsum.flux.PatchGeometry;
+import org.hullsum.flux.PulledBackSurface;
+import org.hullsum.model.Patch;
+import org.hullsum.quadrature.Integral;
+
+/**
+ * One patch, integrated.
+ *
+ * @param patch of the case
+ * @param surface made ready for integration
+ * @param geometry for the construction normal, in working units
+ * @param sign of the declared facing against the construction normal; 0 where it can't be told; +1
+ *     without a surface
+ * @param degenerate why the patch is no surface, or has no facing
+ * @param fluxes by the instant, one for each statement; for the construction normal where they
+ *     follow it
+ * @param claims by the instant, one for each claim, from leaves to enters; empty where it could not
+ *     be computed
+ */
+record PatchAudit(
+    Patch patch,
+    Optional<PulledBackSurface> surface,
+    Optional<PatchGeometry> geometry,
+    int sign,
+    Optional<String> degenerate,
+    List<List<PatchFlux>> fluxes,
+    List<List<Optional<Estimate>>> claims) {
+  PatchAudit {
+    Objects.requireNonNull(patch, "patch");
+    Objects.requireNonNull(surface, "surface");
+    Objects.requireNonNull(geometry, "geometry");
+    Objects.requireNonNull(degenerate, "degenerate");
+    fluxes = List.copyOf(fluxes);
+    claims = List.copyOf(claims);
+  }
+
+  String name() {
+    return patch.name();
+  }
+
+  /** Whether there is a surface, and more to it than a line or a point. */
+  boolean hasArea() {
+    return geometry.filter(g -> Double.isFinite(g.area()) && g.area() > g.areaError()).isPresent();
+  }
+
+  /** Whether a flux of it follows the normal. */
+  boolean followsNormal() {
+    return fluxes.get(0).stream().anyMatch(f -> f.basis().followsNormal());
+  }
+
+  /**
+   * The rate at an instant.
+   *
+   * @param instant its index
+   * @param scale from working units to the rate unit
+   * @param bad why a flux that follows the normal can't be used
+   */
+  PatchRate rateAt(int instant, double scale, Optional<String> bad) {
+    List<Estimate> parts = new ArrayList<>();
+    List<Estimate> following = new ArrayList<>();
+    double magnitude = 0;
+    boolean accurate = true;
+    boolean unknown = false;
+    Optional<String> missing = Optional.empty();
+    for (PatchFlux flux : fluxes.get(instant)) {
+      boolean turns = flux.basis().followsNormal();
+      magnitude += Math.abs(scale) * flux.magnitude();
+      accurate &= flux.status() == Integral.Status.REACHED;
+      unknown |= flux.basis() == FluxBasis.UNKNOWN;
+      Optional<String> fault = turns ? bad.or(() -> degenerate) : Optional.empty();
+      Optional<Estimate> estimate = estimate(flux, turns ? scale * sign : scale);
+      if (flux.basis() != FluxBasis.UNKNOWN && missing.isEmpty()) {
+        missing = fault.or(() -> estimate.isEmpty() ? Optional.of(notFinite()) : Optional.empty());
+      }
+      estimate.ifPresent(parts::add);
+      if (turns) {
+        estimate.ifPresent(following::add);
+      }
+    }
+    boolean whole = !unknown && missing.isEmpty();
+    return new PatchRate(
+        name(),
+        patch.leaves(),
+        patch.enters(),
+        whole ? Optional.of(Estimate.sum(parts)) : Optional.empty(),
+        Estimate.sum(following),
+        !following.isEmpty(),
+        magnitude,
+        accurate,
+        missing);
+  }
+
+  private String notFinite() {
+    return "the flux through `" + name() + "` is not finite";
+  }
+
+  /** Empty where the value or a sensitivity is not finite. */
+  static Optional<Estimate> estimate(PatchFlux flux, double scale) {
+    boolean finite =
+        Double.isFinite(flux.errorBound())
+            && flux.sensitivities().values().stream().allMatch(Double::isFinite);
+    return flux.value()
+        .filter(v -> finite && Double.isFinite(v))
+        .map(v -> new Estimate(v, flux.errorBound(), flux.sensitivities()).times(scale));
+  }
+}
