@@ -19,6 +19,9 @@ import picocli.CommandLine.UnmatchedArgumentException;
 final class Program {
   private static final int USAGE_WIDTH = 100;
 
+  /** Answered without the command-line library, for scripts that ask at every turn. */
+  private static final List<String> VERSION = List.of("--version");
+
   private final Output out;
   private final Output err;
   private final Clock clock;
@@ -38,7 +41,7 @@ final class Program {
   ExitCode run(List<String> arguments) {
     ExitCode code;
     try {
-      code = parse(commands(), arguments);
+      code = arguments.equals(VERSION) ? version() : parse(commands(), arguments);
     } catch (Throwable fault) {
       err.line("hullsum: " + Faults.describe(fault));
       code = ExitCode.FAULT;
@@ -141,6 +144,11 @@ final class Program {
         StarterCase.of(kind)
             .orElseThrow(() -> new ParameterException(command, StarterCase.refusal(kind)));
     out.print(starter.text());
+    return ExitCode.FINE;
+  }
+
+  private ExitCode version() {
+    out.line(ProgramVersion.text());
     return ExitCode.FINE;
   }
 
