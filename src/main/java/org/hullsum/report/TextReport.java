@@ -2,10 +2,12 @@ package org.hullsum.report;
 
 import java.util.List;
 import java.util.Locale;
+import java.util.stream.Collectors;
 import org.hullsum.audit.AuditResult;
 import org.hullsum.audit.BalanceResult;
 import org.hullsum.audit.CaseResult;
 import org.hullsum.problem.Place;
+import org.hullsum.problem.Problem;
 import org.hullsum.problem.Severity;
 
 /**
@@ -32,6 +34,17 @@ public final class TextReport {
   /** The part of one case; ends in a line feed. */
   public static String of(CaseResult audited) {
     return new CaseText(audited).write().toString();
+  }
+
+  /**
+   * One problem of a file: {@code FILE:LINE:COLUMN: message}, over several lines if it has them.
+   */
+  public static String of(Problem problem) {
+    String kind = problem.kind().fatal() ? "" : "warning: ";
+    return (problem.place() + ": " + kind + problem.message())
+        .lines()
+        .map(Words::printable)
+        .collect(Collectors.joining("\n"));
   }
 
   /** What follows the last case: the verdict over several cases, and the caution. */

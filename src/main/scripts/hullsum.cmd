@@ -1,0 +1,8 @@
+@echo off
+rem Starts Hullsum from wherever this script is called.
+setlocal
+for %%I in ("%~dp0..") do set "HULLSUM=%%~fI"
+set "JAVA=java"
+if defined JAVA_HOME set "JAVA=%JAVA_HOME%\bin\java"
+"%JAVA%" -Xlog:disable -Xlog:all=error:stderr -Xshare:auto -XX:SharedArchiveFile="%HULLSUM%\hullsum.jsa" -XX:+UseSerialGC -XX:-UsePerfData -jar "%HULLSUM%\hullsum.jar" %*
+exit /b %ERRORLEVEL%
