@@ -16,6 +16,7 @@ import org.hullsum.problem.ProblemKind;
 final class MapReader {
   private final YamlMap map;
   private final Section section;
+  private final Set<String> keys;
   private final ProblemAccumulator problems;
   private final Set<String> excused = new HashSet<>();
   private boolean faulty;
@@ -23,6 +24,7 @@ final class MapReader {
   private MapReader(YamlMap map, Section section, ProblemAccumulator problems) {
     this.map = map;
     this.section = section;
+    this.keys = section.keys();
     this.problems = problems;
   }
 
@@ -35,7 +37,7 @@ final class MapReader {
 
   private void check(YamlMap.Entry entry) {
     String key = entry.name();
-    if (section.keys().contains(key)) {
+    if (keys.contains(key)) {
       return;
     }
     faulty = true;
@@ -55,10 +57,10 @@ final class MapReader {
   private String advice(YamlText key) {
     String trap = YamlTraps.hint(key);
     if (!trap.isEmpty()) {
-      excused.addAll(section.keys());
+      excused.addAll(keys);
       return trap;
     }
-    Optional<String> near = Nearest.to(key.text(), section.keys());
+    Optional<String> near = Nearest.to(key.text(), keys);
     if (near.isPresent()) {
       excused.add(near.get());
       return "; did you mean `" + near.get() + "`?";
@@ -67,11 +69,11 @@ final class MapReader {
     if (owner.isPresent()) {
       return "; it belongs in " + owner.get().title() + ". Known here: " + known();
     }
-    return section.keys().isEmpty() ? "" : "; known here: " + known();
+    return keys.isEmpty() ? "" : "; known here: " + known();
   }
 
   private String known() {
-    return section.keys().stream().collect(Collectors.joining(", "));
+    return keys.stream().collect(Collectors.joining(", "));
   }
 
   Place place() {

@@ -71,13 +71,13 @@ enum Section {
   HALF_SPACE("the body `half-space`", "through normal", "");
 
   private final String title;
-  private final Set<String> keys;
-  private final Set<String> notYet;
+  private final String keys;
+  private final String notYet;
 
   Section(String title, String keys, String notYet) {
     this.title = title;
-    this.keys = words(keys);
-    this.notYet = words(notYet);
+    this.keys = keys;
+    this.notYet = notYet;
   }
 
   private static Set<String> words(String text) {
@@ -92,22 +92,22 @@ enum Section {
 
   /** The keys that this version reads, in the order of the format's page. */
   Set<String> keys() {
-    return keys;
+    return words(keys);
   }
 
   /** The keys of the format that this version refuses for now. */
   Set<String> notYet() {
-    return notYet;
+    return words(notYet);
   }
 
   /** Where a key that is unknown here belongs, if it is a key at all. */
   static Optional<Section> owning(String key) {
     return Arrays.stream(values())
-        .filter(s -> s.keys.contains(key) || s.notYet.contains(key))
+        .filter(s -> s.keys().contains(key) || s.notYet().contains(key))
         .findFirst();
   }
 
   static Set<String> allKeys() {
-    return Arrays.stream(values()).flatMap(s -> s.keys.stream()).collect(Collectors.toSet());
+    return Arrays.stream(values()).flatMap(s -> s.keys().stream()).collect(Collectors.toSet());
   }
 }
