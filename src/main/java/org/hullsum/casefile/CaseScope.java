@@ -93,6 +93,11 @@ final class CaseScope {
     return values.keySet().containsAll(Symbols.in(e));
   }
 
+  /** Whether every declared parameter has a value, so that surfaces can be built. */
+  boolean complete() {
+    return values.keySet().containsAll(dimensions.keySet());
+  }
+
   /** The value of a formula of parameters; empty where one of them was refused. */
   Optional<Double> value(Expression e) {
     if (!resolved(e)) {

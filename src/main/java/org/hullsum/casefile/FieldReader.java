@@ -25,6 +25,9 @@ final class FieldReader {
   private static final List<String> KINDS = List.of("vector", "gradient", "sum", "carrier");
   private static final List<String> COORDINATES = List.of("cartesian", "cylindrical", "spherical");
 
+  /** How deep fields may be made of one another. */
+  private static final int MOST_LAYERS = 50;
+
   private final FormulaReader formulas;
   private final ValueReader values;
   private final ProblemAccumulator problems;
@@ -87,6 +90,13 @@ final class FieldReader {
               + name.get().shown()
               + Nearest.hint(name.get().text(), stated.keySet())
               + YamlTraps.hint(name.get()));
+      return Optional.empty();
+    }
+    if (open.size() >= MOST_LAYERS) {
+      problems.add(
+          ProblemKind.LIMIT_EXCEEDED,
+          value.place(),
+          "fields are made of one another in more than " + MOST_LAYERS + " layers");
       return Optional.empty();
     }
     if (open.contains(name.get().text())) {
@@ -211,11 +221,11 @@ final class FieldReader {
         : Optional.empty();
   }
 
-  private static Map<String, Dimension> variables(Coordinates coordinates) {
-    Map<String, Dimension> variables = new LinkedHashMap<>(Need.TIME);
+  private static Map<String, Optional<Dimension>> variables(Coordinates coordinates) {
+    Map<String, Optional<Dimension>> variables = new LinkedHashMap<>(Need.TIME);
     for (String name : coordinates.definitions().keySet()) {
       boolean angle = List.of("theta", "polar", "azimuth").contains(name);
-      variables.put(name, angle ? Dimension.NONE : Dimension.LENGTH);
+      variables.put(name, Optional.of(angle ? Dimension.NONE : Dimension.LENGTH));
     }
     return variables;
   }

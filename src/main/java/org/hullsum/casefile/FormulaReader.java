@@ -95,7 +95,7 @@ final class FormulaReader {
 
   private Map<String, Optional<Dimension>> dimensions(Need need) {
     Map<String, Optional<Dimension>> dimensions = new LinkedHashMap<>(scope.dimensions());
-    need.variables().forEach((name, d) -> dimensions.put(name, Optional.of(d)));
+    dimensions.putAll(need.variables());
     return dimensions;
   }
 

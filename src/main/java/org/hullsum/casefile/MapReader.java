@@ -103,6 +103,14 @@ final class MapReader {
     return keys.stream().filter(this::has).toList();
   }
 
+  /** Whether a key stands without a value, or with {@code true}. */
+  boolean isBare(String key) {
+    return map.entry(key)
+        .flatMap(e -> e.value().asText())
+        .filter(t -> t.missing() || t.text().equals("true"))
+        .isPresent();
+  }
+
   /** The value of an optional key; a key without a value is reported. */
   Optional<YamlValue> get(String key) {
     Optional<YamlMap.Entry> entry = map.entry(key);

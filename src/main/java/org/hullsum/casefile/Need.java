@@ -11,19 +11,22 @@ import org.hullsum.units.Unit;
  * What a place of a case needs of the number, quantity or formula that stands there.
  *
  * @param what what stands there, such as {@code the radius}
- * @param variables the coordinates that a formula there may use, each with its dimension
+ * @param variables the coordinates that a formula there may use, each with its dimension if it has one
  * @param dimension what it must measure; empty for any
  * @param stated the unit that the case states for it; a bare number alone is in that unit
  */
 record Need(
     String what,
-    Map<String, Dimension> variables,
+    Map<String, Optional<Dimension>> variables,
     Optional<Dimension> dimension,
     Optional<Unit> stated) {
-  static final Map<String, Dimension> SPACE =
-      Map.of("x", Dimension.LENGTH, "y", Dimension.LENGTH, "z", Dimension.LENGTH);
-  static final Map<String, Dimension> TIME = Map.of("t", Dimension.TIME);
-  static final Map<String, Dimension> SPACE_AND_TIME = both(SPACE, TIME);
+  static final Map<String, Optional<Dimension>> SPACE =
+      Map.of(
+          "x", Optional.of(Dimension.LENGTH),
+          "y", Optional.of(Dimension.LENGTH),
+          "z", Optional.of(Dimension.LENGTH));
+  static final Map<String, Optional<Dimension>> TIME = Map.of("t", Optional.of(Dimension.TIME));
+  static final Map<String, Optional<Dimension>> SPACE_AND_TIME = both(SPACE, TIME);
 
   Need {
     Objects.requireNonNull(what, "what");
@@ -32,8 +35,9 @@ record Need(
     variables = Map.copyOf(variables);
   }
 
-  static Map<String, Dimension> both(Map<String, Dimension> a, Map<String, Dimension> b) {
-    Map<String, Dimension> all = new LinkedHashMap<>(a);
+  static Map<String, Optional<Dimension>> both(
+      Map<String, Optional<Dimension>> a, Map<String, Optional<Dimension>> b) {
+    Map<String, Optional<Dimension>> all = new LinkedHashMap<>(a);
     all.putAll(b);
     return all;
   }
@@ -56,7 +60,7 @@ record Need(
     return new Need(what, Map.of(), Optional.empty(), Optional.empty());
   }
 
-  Need in(Map<String, Dimension> coordinates) {
+  Need in(Map<String, Optional<Dimension>> coordinates) {
     return new Need(what, coordinates, dimension, stated);
   }
 

@@ -31,7 +31,7 @@ enum Section {
   FACING("`facing`", "along away-from", ""),
   FLUX(
       "`flux`",
-      "field flux-density unit metered fixed correlated-with profile times within",
+      "field flux-density unit metered fixed correlated-with profile none unknown times within",
       "traverse facet-values carried-by content quantity"),
   METERED("`metered`", "", "totaliser over file column time unit uncertainty between"),
   PROFILE("`profile`", "power-law laminar uniform log-law centreline mean", "centre radius"),

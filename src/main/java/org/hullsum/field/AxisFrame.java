@@ -55,11 +55,10 @@ public record AxisFrame(VectorExpression through, Vector3 axis, Vector3 zero, Ve
 
   /** The vector with the given components along zero, quarter and axis, in Cartesian components. */
   VectorExpression vector(Expression alongZero, Expression alongQuarter, Expression alongAxis) {
-    VectorExpression sum =
-        VectorExpression.of(zero)
-            .times(alongZero)
-            .plus(VectorExpression.of(quarter).times(alongQuarter))
-            .plus(VectorExpression.of(axis).times(alongAxis));
-    return Algebra3.simplified(sum);
+    return VectorExpression.of(zero)
+        .times(alongZero)
+        .plus(VectorExpression.of(quarter).times(alongQuarter))
+        .plus(VectorExpression.of(axis).times(alongAxis))
+        .simplified();
   }
 }

@@ -76,14 +76,13 @@ final class NativeForm {
     return switch (coordinates.kind()) {
       case CARTESIAN -> new VectorExpression(first, second, third);
       case CYLINDRICAL ->
-          Algebra3.simplified(new VectorExpression(first, second.over(r), third));
+          new VectorExpression(first, second.over(r), third).simplified();
       case SPHERICAL ->
-          Algebra3.simplified(
-              new VectorExpression(
+          new VectorExpression(
                   first,
                   second.over(r),
-                  third.over(
-                      r.times(Expression.call(Function.SIN, Expression.symbol("polar"))))));
+                  third.over(r.times(Expression.call(Function.SIN, Expression.symbol("polar")))))
+              .simplified();
     };
   }
 
@@ -104,13 +103,13 @@ final class NativeForm {
       return f;
     }
     VectorExpression placed =
-        Algebra3.replace(f, guarded ? guarded() : coordinates.definitions());
+        f.replace(guarded ? guarded() : coordinates.definitions());
     List<VectorExpression> unit = coordinates.unitVectors();
-    return Algebra3.simplified(
-        unit.get(0)
-            .times(placed.x())
-            .plus(unit.get(1).times(placed.y()))
-            .plus(unit.get(2).times(placed.z())));
+    return unit.get(0)
+        .times(placed.x())
+        .plus(unit.get(1).times(placed.y()))
+        .plus(unit.get(2).times(placed.z()))
+        .simplified();
   }
 
   private Map<String, Expression> guarded() {

@@ -19,14 +19,14 @@ public final class VectorFields {
   /** A field by its components along the local unit vectors. */
   public static VectorField ofComponents(
       String name, Coordinates coordinates, VectorExpression components) {
-    return of(name, coordinates, Algebra3.simplified(components), false);
+    return of(name, coordinates, components.simplified(), false);
   }
 
   /** The field times · grad(of). */
   public static VectorField gradient(
       String name, Coordinates coordinates, Expression of, Expression times) {
     VectorExpression gradient = new NativeForm(coordinates).gradient(of);
-    return of(name, coordinates, Algebra3.simplified(gradient.times(times)), true);
+    return of(name, coordinates, gradient.times(times).simplified(), true);
   }
 
   /** The sum of one or more fields. */
@@ -35,13 +35,13 @@ public final class VectorFields {
     if (parts.stream().allMatch(p -> p.coordinates().equals(first.coordinates()))) {
       VectorExpression sum =
           parts.stream().map(VectorField::components).reduce(VectorExpression::plus).orElseThrow();
-      return of(name, first.coordinates(), Algebra3.simplified(sum), true);
+      return of(name, first.coordinates(), sum.simplified(), true);
     }
     VectorExpression sum =
         parts.stream().map(VectorField::cartesian).reduce(VectorExpression::plus).orElseThrow();
     Expression divergence =
         parts.stream().map(VectorField::divergence).reduce(Expression::plus).orElseThrow();
-    return inCartesian(name, Algebra3.simplified(sum), Simplifier.simplify(divergence));
+    return inCartesian(name, sum.simplified(), Simplifier.simplify(divergence));
   }
 
   /**
@@ -52,14 +52,14 @@ public final class VectorFields {
   public static VectorField carried(
       String name, VectorField carrier, Coordinates coordinates, Expression content) {
     if (coordinates.equals(carrier.coordinates())) {
-      return of(name, coordinates, Algebra3.simplified(carrier.components().times(content)), true);
+      return of(name, coordinates, carrier.components().times(content).simplified(), true);
     }
     Expression c = new NativeForm(coordinates).toCartesian(content);
     VectorExpression gradient = new NativeForm(CoordinateSystems.cartesian()).gradient(c);
     Expression divergence = c.times(carrier.divergence()).plus(carrier.cartesian().dot(gradient));
     return inCartesian(
         name,
-        Algebra3.simplified(carrier.cartesian().times(c)),
+        carrier.cartesian().times(c).simplified(),
         Simplifier.simplify(divergence));
   }
 
