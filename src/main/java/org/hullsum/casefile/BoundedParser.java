@@ -1,7 +1,10 @@
 package org.hullsum.casefile;
 
+import java.util.LinkedHashMap;
+import java.util.Map;
 import java.util.Optional;
 import org.hullsum.problem.ProblemKind;
+import org.snakeyaml.engine.v2.common.Anchor;
 import org.snakeyaml.engine.v2.events.Event;
 import org.snakeyaml.engine.v2.events.MappingStartEvent;
 import org.snakeyaml.engine.v2.events.NodeEvent;
@@ -12,7 +15,7 @@ import org.snakeyaml.engine.v2.exceptions.YamlEngineException;
 import org.snakeyaml.engine.v2.parser.Parser;
 
 /**
- * A parser that gives up where a file nests too deep or uses what the format has not (tags), before
+ * A parser that gives up where a file nests too deep or uses what the format has not (tags, anchors to which nothing refers), before
  * anything recursive sees it.
  */
 final class BoundedParser implements Parser {
@@ -42,6 +45,7 @@ final class BoundedParser implements Parser {
   }
 
   private final Parser parser;
+  private final Map<String, NodeEvent> unusedAnchors = new LinkedHashMap<>();
   private int depth;
 
   BoundedParser(Parser parser) {
@@ -80,7 +84,33 @@ final class BoundedParser implements Parser {
       default -> {}
     }
     refuseTag(event);
+    follow(event);
     return event;
+  }
+
+  private void follow(Event event) {
+    switch (event.getEventId()) {
+      case Alias ->
+          ((NodeEvent) event).getAnchor().map(Anchor::getValue).ifPresent(unusedAnchors::remove);
+      case Scalar, SequenceStart, MappingStart -> {
+        NodeEvent node = (NodeEvent) event;
+        node.getAnchor().map(Anchor::getValue).ifPresent(name -> unusedAnchors.put(name, node));
+      }
+      case StreamEnd -> refuseUnused();
+      default -> {}
+    }
+  }
+
+  /** A text that begins with an ampersand reads as an anchor, and its beginning is gone. */
+  private void refuseUnused() {
+    for (Map.Entry<String, NodeEvent> anchor : unusedAnchors.entrySet()) {
+      throw new Refusal(
+          ProblemKind.SYNTAX,
+          anchor.getValue().getStartMark(),
+          "a text that begins with `&` is an anchor to YAML, and nothing refers to `&"
+              + anchor.getKey()
+              + "`: quote the text, as in \"&…\", or leave the anchor out");
+    }
   }
 
   private static void refuseTag(Event event) {

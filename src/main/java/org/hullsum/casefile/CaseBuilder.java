@@ -124,7 +124,7 @@ final class CaseBuilder {
       return Optional.of(UncertaintyMeaning.parse(text.get().text()));
     } catch (TextFault fault) {
       problems.add(text.get(), fault);
-      return Optional.empty();
+      return Optional.of(new UncertaintyMeaning.CoverageFactor(1));
     }
   }
 

@@ -103,7 +103,9 @@ final class CaseScope {
     if (!resolved(e)) {
       return Optional.empty();
     }
-    BatchEvaluator evaluator = BatchEvaluator.compile(List.of(), values, List.of(e));
+    Map<String, Double> needed = new LinkedHashMap<>();
+    Symbols.in(e).forEach(name -> needed.put(name, values.get(name)));
+    BatchEvaluator evaluator = BatchEvaluator.compile(List.of(), needed, List.of(e));
     double[][] result = new double[1][1];
     evaluator.evaluate(new double[0][0], 1, result, evaluator.workspace());
     return Optional.of(result[0][0]);

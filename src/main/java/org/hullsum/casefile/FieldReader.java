@@ -55,7 +55,7 @@ final class FieldReader {
       problems.add(
           ProblemKind.BAD_NAME,
           entry.key().place(),
-          "the name " + entry.key().shown() + " of a field " + fault.get());
+          "a field can't be called " + entry.key().shown() + ": " + fault.get());
     }
     stated.put(entry.name(), entry);
   }

@@ -22,6 +22,9 @@ final class FileTextReader {
   /** No case file is as large; large tables belong in CSV files. */
   static final int MOST_BYTES = 8 << 20;
 
+  /** Characters of a line: far more than a person writes, and few enough to be read at once. */
+  private static final int LONGEST_LINE = 200_000;
+
   private static final char BYTE_ORDER_MARK = '\uFEFF';
 
   /** The text of a file, with the digest of its bytes. */
@@ -99,6 +102,9 @@ final class FileTextReader {
     }
     String body =
         !text.isEmpty() && text.charAt(0) == BYTE_ORDER_MARK ? text.substring(1) : text;
+    if (tooLongALine(new SourceText(name, body), problems)) {
+      return Optional.empty();
+    }
     if (body.isBlank()) {
       problems.add(
           ProblemKind.NOT_TEXT,
@@ -107,6 +113,20 @@ final class FileTextReader {
       return Optional.empty();
     }
     return Optional.of(body);
+  }
+
+  private static boolean tooLongALine(SourceText source, ProblemAccumulator problems) {
+    for (int line = 0; line < source.lineCount(); line++) {
+      int length = source.lineLength(line);
+      if (length > LONGEST_LINE) {
+        problems.add(
+            ProblemKind.LIMIT_EXCEEDED,
+            source.place(source.indexOf(line, 0)),
+            "this line has " + length + " characters; no line of a case has more than " + LONGEST_LINE);
+        return true;
+      }
+    }
+    return false;
   }
 
   private static int controlCharacter(String text) {

@@ -1,12 +1,9 @@
 package org.hullsum.casefile;
 
-import java.util.LinkedHashMap;
-import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import java.util.Set;
 import org.hullsum.expression.DimensionCheck;
 import org.hullsum.expression.Expression;
 import org.hullsum.expression.ExpressionParser;
@@ -48,10 +45,12 @@ final class FormulaReader {
   }
 
   private Optional<ParsedExpression> parse(YamlText text, Need need) {
-    Set<String> symbols = new LinkedHashSet<>(scope.dimensions().keySet());
-    symbols.addAll(need.variables().keySet());
+    if (scope.problems().full()) {
+      return Optional.empty();
+    }
     try {
-      ParsedExpression parsed = ExpressionParser.parse(text.text(), symbols, scope.working());
+      ParsedExpression parsed =
+          ExpressionParser.parse(text.text(), symbols(need).keySet(), scope.working());
       parsed.notes().forEach(scope::note);
       if (need.variables().containsKey("t") && Symbols.in(parsed.root()).contains("t")) {
         scope.usesTime(text.place());
@@ -73,7 +72,7 @@ final class FormulaReader {
       return Optional.of(new Formula(parsed.root(), Optional.empty()));
     }
     try {
-      Optional<Dimension> found = DimensionCheck.of(parsed, dimensions(need));
+      Optional<Dimension> found = DimensionCheck.of(parsed, symbols(need));
       if (need.dimension().isPresent()
           && found.isPresent()
           && !found.get().equals(need.dimension().get())) {
@@ -84,7 +83,7 @@ final class FormulaReader {
       if (need.stated().isPresent() && found.isEmpty()) {
         root = inStatedUnit(root, need.stated().get());
       } else if (need.stated().isPresent()) {
-        refuseMixture(parsed, need.stated().get(), need);
+        refuseMixture(parsed, need.stated().get());
       }
       return Optional.of(new Formula(root, found));
     } catch (TextFault fault) {
@@ -93,10 +92,10 @@ final class FormulaReader {
     }
   }
 
-  private Map<String, Optional<Dimension>> dimensions(Need need) {
-    Map<String, Optional<Dimension>> dimensions = new LinkedHashMap<>(scope.dimensions());
-    dimensions.putAll(need.variables());
-    return dimensions;
+  private Map<String, Optional<Dimension>> symbols(Need need) {
+    return need.variables().isEmpty()
+        ? scope.dimensions()
+        : new LayeredMap<>(need.variables(), scope.dimensions());
   }
 
   private static String mismatch(Need need, Dimension found) {
@@ -119,7 +118,7 @@ final class FormulaReader {
   }
 
   /** A bare number in a sum can be meant in the working or in the stated unit: asked for. */
-  private void refuseMixture(ParsedExpression parsed, Unit unit, Need need) throws TextFault {
+  private void refuseMixture(ParsedExpression parsed, Unit unit) throws TextFault {
     double factor = unit.scale() / scope.working().scale(unit.dimension());
     if (BareNumbers.sameScale(factor)) {
       return;

@@ -21,13 +21,13 @@ final class NameRules {
     if (!name.codePoints().allMatch(c -> Character.isLetterOrDigit(c) || c == '_')
         || name.isEmpty()
         || Character.isDigit(name.codePointAt(0))) {
-      return Optional.of("is made of letters, digits and _, and begins with no digit");
+      return Optional.of("such a name is made of letters, digits and _, and begins with no digit");
     }
     if (COORDINATES.contains(name)) {
-      return Optional.of("is not that of a coordinate: " + sorted(COORDINATES) + " are taken");
+      return Optional.of("it is a coordinate; so are " + sorted(COORDINATES));
     }
     if (Function.named(name).isPresent() || WORDS.contains(name)) {
-      return Optional.of("is not that of a function, a constant or an operator of formulas");
+      return Optional.of("it is a function, a constant or an operator of formulas");
     }
     return tooLong(name);
   }
@@ -38,15 +38,15 @@ final class NameRules {
         name.codePoints().allMatch(c -> Character.isLetterOrDigit(c) || "-_./".indexOf(c) >= 0);
     if (!characters || name.codePoints().noneMatch(Character::isLetter)) {
       return Optional.of(
-          "is made of letters, digits and - _ . / with at least one letter; a `label` may hold any"
-              + " text");
+          "such a name is made of letters, digits and - _ . / with at least one letter; a `label` may"
+              + " hold any text");
     }
     return tooLong(name);
   }
 
   private static Optional<String> tooLong(String name) {
     return name.length() > LONGEST
-        ? Optional.of("has at most " + LONGEST + " characters")
+        ? Optional.of("a name has at most " + LONGEST + " characters")
         : Optional.empty();
   }
 

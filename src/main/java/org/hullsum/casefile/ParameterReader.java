@@ -59,7 +59,7 @@ final class ParameterReader {
       problems.add(
           ProblemKind.BAD_NAME,
           entry.key().place(),
-          "the name " + entry.key().shown() + " of a parameter " + fault.get());
+          "a parameter can't be called " + entry.key().shown() + ": " + fault.get());
     }
     if (!NameRules.COORDINATES.contains(name)) {
       scope.declare(name);
@@ -155,7 +155,9 @@ final class ParameterReader {
         problems.add(
             ProblemKind.CYCLE,
             places.get(at),
-            "the parameters " + String.join(" → ", loop) + " are defined by one another");
+            loop.size() == 2
+                ? "the parameter `" + at + "` is defined by itself"
+                : "the parameters " + String.join(" → ", loop) + " are defined by one another");
       }
     }
   }

@@ -69,7 +69,7 @@ final class PatchReader {
             problems.add(
                 ProblemKind.BAD_NAME,
                 entry.key().place(),
-                "the name " + entry.key().shown() + " of a patch " + f));
+                "a patch can't be called " + entry.key().shown() + ": " + f));
     stated.put(entry.name(), entry);
   }
 

@@ -15,8 +15,8 @@ final class ProblemAccumulator {
   /** How many problems of one file are told one by one. */
   static final int MOST_TOLD = 50;
 
-  /** More than that are not even kept: the rest is only counted. */
-  private static final int MOST_KEPT = 10_000;
+  /** After so many, what is left of the file is not looked at any more. */
+  private static final int MOST_SOUGHT = 500;
 
   private static final Comparator<Problem> BY_PLACE =
       Comparator.<Problem>comparingInt(p -> p.place().line())
@@ -24,14 +24,10 @@ final class ProblemAccumulator {
 
   private final Set<Problem> problems = new LinkedHashSet<>();
   private int fatal;
-  private int dropped;
 
   void add(ProblemKind kind, Place place, String message) {
     Problem problem = new Problem(kind, place, message);
-    if (problems.size() >= MOST_KEPT) {
-      dropped++;
-      fatal += kind.fatal() ? 1 : 0;
-    } else if (problems.add(problem)) {
+    if (!full() && problems.add(problem)) {
       fatal += kind.fatal() ? 1 : 0;
     }
   }
@@ -41,14 +37,14 @@ final class ProblemAccumulator {
     add(fault.kind(), text.place(fault.start()), fault.getMessage());
   }
 
+  /** Whether enough is wrong to stop looking for more. */
+  boolean full() {
+    return problems.size() >= MOST_SOUGHT;
+  }
+
   /** How many fatal problems there are so far. */
   int fatalCount() {
     return fatal;
-  }
-
-  /** Those that keep the case from being audited, warnings left out. */
-  List<Problem> fatal() {
-    return bounded(problems.stream().filter(p -> p.kind().fatal()).sorted(BY_PLACE).toList());
   }
 
   /** Those that do not. */
@@ -71,7 +67,10 @@ final class ProblemAccumulator {
         new Problem(
             ProblemKind.LIMIT_EXCEEDED,
             last.place(),
-            "and " + (sorted.size() - MOST_TOLD + dropped) + " more problems after this one"));
+            "and "
+                + (full() ? "at least " : "")
+                + (sorted.size() - MOST_TOLD)
+                + " more problems after this one"));
     return told;
   }
 }

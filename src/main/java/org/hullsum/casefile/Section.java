@@ -14,7 +14,7 @@ import java.util.stream.Collectors;
  */
 enum Section {
   CASE(
-      "the case itself",
+      "a case",
       "format title about quantity units uncertainties parameters fields volumes patches envelopes"
           + " tolerances time waivers",
       "quantities network"),

@@ -56,6 +56,11 @@ final class SourceText {
     return text.substring(lineStarts[line], end);
   }
 
+  /** Characters of a line, its end included. */
+  int lineLength(int line) {
+    return (line + 1 < lineStarts.length ? lineStarts[line + 1] : text.length()) - lineStarts[line];
+  }
+
   /** The line, from 0, that holds an index. */
   int lineAt(int index) {
     int found = Arrays.binarySearch(lineStarts, index);

@@ -63,14 +63,14 @@ final class VolumeReader {
   private void checkName(YamlText key, String what) {
     Optional<String> fault =
         key.text().equals(Volume.SURROUNDINGS)
-            ? Optional.of("is not `surroundings`, which is the outside")
+            ? Optional.of("`surroundings` is the outside of every volume")
             : NameRules.faultOfObject(key.text());
     fault.ifPresent(
         f ->
             problems.add(
                 ProblemKind.BAD_NAME,
                 key.place(),
-                "the name " + key.shown() + " of " + what + " " + f));
+                what + " can't be called " + key.shown() + ": " + f));
   }
 
   /** The names of the volumes, without the surroundings. */
@@ -130,7 +130,7 @@ final class VolumeReader {
       problems.add(
           ProblemKind.BAD_NAME,
           entry.key().place(),
-          "the name " + entry.key().shown() + " of an envelope is that of a volume already");
+          "an envelope can't be called " + entry.key().shown() + ": a volume is called so");
     }
     envelopeNames.add(entry.name());
     Optional<MapReader> map =

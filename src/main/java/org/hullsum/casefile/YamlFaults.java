@@ -56,14 +56,37 @@ final class YamlFaults {
           ProblemKind.SYNTAX, place, "a tab stands in the indentation; YAML indents with blanks");
       return;
     }
+    String trap = trap(fault, source, place);
     String hint = gluedKey(source, line);
-    if (hint.isEmpty()) {
-      hint = quoting(source, index);
+    if (hint.isEmpty() && trap.isEmpty()) {
+      trap = quoting(source, index);
     }
     if (hint.isEmpty()) {
       hint = flowEnd(said);
     }
-    problems.add(ProblemKind.SYNTAX, place, "this is not YAML: " + plain(said) + hint);
+    problems.add(
+        ProblemKind.SYNTAX,
+        place,
+        trap.isEmpty() ? "this is not YAML: " + plain(said) + hint : trap);
+  }
+
+  /** Faults that have a name of their own. */
+  private static String trap(
+      MarkedYamlEngineException fault, SourceText source, Place place) {
+    String said = String.valueOf(fault.getProblem());
+    if (said.contains("another document")) {
+      return "a case file holds one document; here a second one begins";
+    }
+    String context = String.valueOf(fault.getContext());
+    if (context.contains("quoted scalar") && fault.getContextMark().isPresent()) {
+      int opened = fault.getContextMark().get().getLine() + 1;
+      return said.contains("end of stream")
+          ? "the quote that opens on line " + opened + " is never closed"
+          : "in the quoted text that begins on line " + opened + ": " + firstLine(said);
+    }
+    return source.text().startsWith("%YAML") && place.line() == 1
+        ? "leave the %YAML line out; a case is read as YAML 1.2"
+        : "";
   }
 
   private static int tabInIndent(String line) {
@@ -104,10 +127,10 @@ final class YamlFaults {
     boolean dash = text.startsWith("- ", start) && start > 0;
     if (NEEDS_QUOTES.indexOf(first) < 0 && !dash) {
       return text.indexOf(": ", start) > 0 && text.indexOf(": ") != text.lastIndexOf(": ")
-          ? "; quote a text that holds `: `"
+          ? "a text that holds `: ` must be quoted; YAML takes it for a key"
           : "";
     }
-    return "; a text that begins with `"
+    return "a text that begins with `"
         + (dash ? "- " : first)
         + "` must be quoted, as in \""
         + (dash ? "- " : first)
@@ -131,7 +154,9 @@ final class YamlFaults {
   }
 
   private static String plain(String said) {
-    return firstLine(said).replace("<block end>", "the end of the block");
+    return firstLine(said)
+        .replace("<block end>", "the end of the block")
+        .replace("<scalar>", "a text");
   }
 
   private static String firstLine(String message) {
