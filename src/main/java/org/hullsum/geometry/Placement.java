@@ -61,6 +61,11 @@ public record Placement(Optional<Turn> turn, Optional<VectorExpression> move) {
     return new Surface(surface.kind(), charts, surface.trim());
   }
 
+  /** A point in its place. */
+  public VectorExpression placed(VectorExpression point) {
+    return moved(point).simplified();
+  }
+
   private VectorExpression moved(VectorExpression r) {
     VectorExpression turned = turn.isPresent() ? turned(r, turn.get()) : r;
     return move.isPresent() ? turned.plus(move.get()) : turned;

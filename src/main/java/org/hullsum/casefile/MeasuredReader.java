@@ -1,0 +1,130 @@
+package org.hullsum.casefile;
+
+import java.util.Optional;
+import org.hullsum.expression.Expression;
+import org.hullsum.model.Input;
+import org.hullsum.problem.ProblemKind;
+import org.hullsum.problem.TextFault;
+import org.hullsum.units.Dimension;
+import org.hullsum.units.MeasuredQuantity;
+import org.hullsum.units.MeasuredQuantityParser;
+import org.hullsum.units.Noted;
+import org.hullsum.units.WorkingUnits;
+
+/**
+ * Reads measured quantities: a figure, which becomes an input of its own name so that results can
+ * be derived by it, or a formula of parameters.
+ */
+final class MeasuredReader {
+  private final FormulaReader formulas;
+  private final CaseScope scope;
+  private final MeasuredQuantityParser parser;
+
+  MeasuredReader(FormulaReader formulas) {
+    this.formulas = formulas;
+    this.scope = formulas.scope();
+    this.parser = MeasuredQuantityParser.of(scope.usualMeaning(), scope.working());
+  }
+
+  /** Whether a text is a value with an uncertainty. */
+  static boolean hasUncertainty(String text) {
+    return text.indexOf('±') >= 0 || text.contains("+/-") || text.contains("+-");
+  }
+
+  /** Reads a value with its uncertainty; empty where it was refused. */
+  Optional<MeasuredQuantity> figure(YamlText text) {
+    int wrong = text.text().indexOf("+-");
+    if (wrong >= 0) {
+      scope
+          .problems()
+          .add(
+              ProblemKind.UNCERTAINTY,
+              text.place(wrong),
+              "`+-` is not read; write ± or +/- before an uncertainty");
+      return Optional.empty();
+    }
+    try {
+      Noted<MeasuredQuantity> figure = parser.parseWithNotes(text.text());
+      figure.notes().forEach(scope::note);
+      return Optional.of(figure.value());
+    } catch (TextFault fault) {
+      scope.problems().add(text, fault);
+      return Optional.empty();
+    }
+  }
+
+  /**
+   * A measured quantity as a formula of inputs.
+   *
+   * @param name of the input that an inline figure becomes, such as {@code feed metered}
+   */
+  Optional<Formula> measured(YamlValue value, String name, Need need) {
+    Optional<YamlText> text = formulas.values().text(value, need.what());
+    if (text.isEmpty()) {
+      return Optional.empty();
+    }
+    if (hasUncertainty(text.get().text())) {
+      return figure(text.get()).flatMap(figure -> input(text.get(), figure, name, need));
+    }
+    Optional<Formula> formula = formulas.formula(value, need);
+    return formula.map(f -> Figures.isFigure(f.expression()) ? exact(text.get(), f, name) : f);
+  }
+
+  private Formula exact(YamlText text, Formula formula, String name) {
+    double number = scope.value(formula.expression()).orElseThrow();
+    return define(text, name, number, 0, Double.POSITIVE_INFINITY, formula.dimension());
+  }
+
+  private Optional<Formula> input(
+      YamlText text, MeasuredQuantity figure, String name, Need need) {
+    WorkingUnits working = scope.working();
+    Optional<Dimension> dimension =
+        figure.quantity().bare() || working.none()
+            ? Optional.empty()
+            : Optional.of(figure.quantity().unit().dimension());
+    if (need.dimension().isPresent()
+        && dimension.isPresent()
+        && !dimension.equals(need.dimension())) {
+      scope
+          .problems()
+          .add(
+              ProblemKind.DIMENSION,
+              text.place(),
+              need.what()
+                  + " must be in "
+                  + need.dimension().get()
+                  + "; this is in "
+                  + dimension.get());
+      return Optional.empty();
+    }
+    return Optional.of(
+        define(
+            text,
+            name,
+            figure.quantity().in(working),
+            figure.standardUncertaintyIn(working),
+            figure.degreesOfFreedom(),
+            dimension));
+  }
+
+  private Formula define(
+      YamlText text,
+      String wanted,
+      double value,
+      double standardUncertainty,
+      double degreesOfFreedom,
+      Optional<Dimension> dimension) {
+    String name = scope.freshName(wanted);
+    scope.define(
+        new Input(
+            name,
+            value,
+            standardUncertainty,
+            degreesOfFreedom,
+            Optional.empty(),
+            true,
+            text.place()),
+        dimension);
+    return new Formula(Expression.symbol(name), dimension);
+  }
+}
