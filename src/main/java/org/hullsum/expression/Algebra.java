@@ -1,7 +1,9 @@
 package org.hullsum.expression;
 
+import java.util.List;
 import java.util.Optional;
 import org.hullsum.expression.Expression.Binary;
+import org.hullsum.expression.Expression.Call;
 import org.hullsum.expression.Expression.Constant;
 import org.hullsum.expression.Expression.Negation;
 import org.hullsum.expression.Expression.Operator;
@@ -16,7 +18,9 @@ import org.hullsum.expression.Expression.Operator;
 final class Algebra {
   static final Constant ZERO = Expression.number(0);
   static final Constant ONE = Expression.number(1);
-  static final Constant MINUS_ONE = Expression.number(-1);
+
+  /** Larger whole values of functions are rather rounded ones. */
+  private static final double LARGEST_FOLDED = 1e6;
 
   private Algebra() {}
 
@@ -140,6 +144,26 @@ final class Algebra {
       return ONE;
     }
     return isOne(a) ? ZERO : Expression.call(Function.LN, a);
+  }
+
+  /** A function, folded where its arguments are plain numbers and its value is a whole number. */
+  static Expression call(Function function, List<Expression> arguments) {
+    Operation operation = Operation.of(function);
+    double[] values = new double[arguments.size()];
+    for (int i = 0; i < values.length; i++) {
+      Optional<Double> value = plain(arguments.get(i));
+      if (value.isEmpty()) {
+        return new Call(function, arguments);
+      }
+      values[i] = value.get();
+    }
+    double result = values.length == 1 ? operation.apply(values[0], 0, 0) : values[0];
+    for (int i = 1; i < values.length; i++) {
+      result = operation.apply(result, values[i], 0);
+    }
+    return result == Math.rint(result) && Math.abs(result) < LARGEST_FOLDED
+        ? Expression.number(result)
+        : new Call(function, arguments);
   }
 
   private static boolean isEuler(Expression e) {

@@ -100,7 +100,7 @@ public final class BatchEvaluator {
       List<String> variables, Map<String, Double> constants, List<Expression> outputs) {
     return new BatchEvaluator(
         variables.size(),
-        new TapeBuilder(variables, constants, TapeBuilder.Powers.MULTIPLIED).build(outputs));
+        new TapeBuilder(variables, constants, TapeBuilder.Purpose.POINTS).build(outputs));
   }
 
   public int variableCount() {

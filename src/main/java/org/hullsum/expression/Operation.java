@@ -56,6 +56,9 @@ enum Operation {
   /** b where a holds, else c. */
   SELECT(3, 2);
 
+  /** Above this the error of a product is itself a number. */
+  private static final double NORMAL = 1e-250;
+
   private final int arity;
   private final int cost;
 
@@ -121,6 +124,22 @@ enum Operation {
       case NOT -> truth(a == 0);
       case SELECT -> a != 0 ? b : c;
       default -> unary(a);
+    };
+  }
+
+  /** Whether a value computed from constants a and b is surely free of rounding. */
+  boolean isExact(double a, double b, double value) {
+    return switch (this) {
+      case ADD, SUBTRACT -> {
+        double other = this == ADD ? b : -b;
+        double back = value - a;
+        yield (a - (value - back)) + (other - back) == 0;
+      }
+      case MULTIPLY -> a == 0 || b == 0 || NORMAL < Math.abs(value) && Math.fma(a, b, -value) == 0;
+      case DIVIDE -> a == 0 && b != 0 || NORMAL < Math.abs(value) && Math.fma(value, b, -a) == 0;
+      case NEGATE, ABS, MIN, MAX, SIGN, SELECT -> true;
+      case LESS, LESS_OR_EQUAL, GREATER, GREATER_OR_EQUAL, EQUAL, NOT_EQUAL, AND, OR, NOT -> true;
+      default -> false;
     };
   }
 

@@ -1,6 +1,7 @@
 package org.hullsum.expression;
 
 import org.hullsum.expression.Expression.Binary;
+import org.hullsum.expression.Expression.Call;
 import org.hullsum.expression.Expression.Negation;
 
 /**
@@ -17,6 +18,11 @@ public final class Simplifier {
       @Override
       public Expression negation(Negation negation) {
         return Algebra.negation(rewrite(negation.operand()));
+      }
+
+      @Override
+      public Expression call(Call call) {
+        return Algebra.call(call.function(), rewriteAll(call.arguments()));
       }
 
       @Override

@@ -6,6 +6,7 @@ import java.util.HashMap;
 import java.util.IdentityHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import org.hullsum.expression.Expression.Binary;
 import org.hullsum.expression.Expression.Call;
 import org.hullsum.expression.Expression.Comparison;
@@ -23,20 +24,25 @@ import org.hullsum.expression.Tape.Instruction;
  * ones are computed at once, whole and half powers become products and roots.
  */
 final class TapeBuilder implements Expression.Visitor<Integer> {
-  /** How powers with a whole exponent are carried out. */
-  enum Powers {
-    /** By repeated multiplication: fastest at points. */
-    MULTIPLIED,
-    /** As one instruction: tight for intervals. */
-    WHOLE
+  /** What the tape is to be run over. */
+  enum Purpose {
+    /** Points: powers are multiplied out, constant parts computed at once. */
+    POINTS,
+    /**
+     * Intervals: a whole power is one instruction, constants are joined only where that is exact,
+     * and quotients that stay finite where their divisor vanishes are seen as such.
+     */
+    ENCLOSURES
   }
 
   /** Beyond this exponent the library's power is as fast and more accurate. */
   private static final int MOST_MULTIPLIED = 32;
 
+  private static final double HALF = 0.5;
+
   private final List<String> variables;
   private final Map<String, Double> constants;
-  private final Powers powers;
+  private final Purpose purpose;
   private final List<Instruction> instructions = new ArrayList<>();
   private final List<Expression> sources = new ArrayList<>();
   private final Map<Instruction, Integer> known = new HashMap<>();
@@ -47,10 +53,10 @@ final class TapeBuilder implements Expression.Visitor<Integer> {
    * @param variables names of the inputs, in their order
    * @param constants values of the other symbols
    */
-  TapeBuilder(List<String> variables, Map<String, Double> constants, Powers powers) {
+  TapeBuilder(List<String> variables, Map<String, Double> constants, Purpose purpose) {
     this.variables = List.copyOf(variables);
     this.constants = Map.copyOf(constants);
-    this.powers = powers;
+    this.purpose = purpose;
   }
 
   /**
@@ -107,7 +113,10 @@ final class TapeBuilder implements Expression.Visitor<Integer> {
 
   private int emit(Operation operation, int a, int b, int c) {
     if (constant(a) && constant(b) && constant(c)) {
-      return number(operation.apply(value(a), value(b), value(c)));
+      double value = operation.apply(value(a), value(b), value(c));
+      if (purpose == Purpose.POINTS || operation.isExact(value(a), value(b), value)) {
+        return number(value);
+      }
     }
     boolean swap = operation.commutes() && a > b;
     return emit(new Instruction(operation, swap ? b : a, swap ? a : b, c, 0));
@@ -147,6 +156,12 @@ final class TapeBuilder implements Expression.Visitor<Integer> {
 
   @Override
   public Integer binary(Binary b) {
+    if (purpose == Purpose.ENCLOSURES && b.operator() == Operator.DIVIDE) {
+      Optional<RemovableQuotient> removable = RemovableQuotient.of(b, variables);
+      if (removable.isPresent()) {
+        return removable(removable.get());
+      }
+    }
     int left = of(b.left());
     int right = of(b.right());
     if (b.operator() == Operator.POWER && constant(right)) {
@@ -162,6 +177,12 @@ final class TapeBuilder implements Expression.Visitor<Integer> {
     return emit(Operation.of(b.operator()), left, right);
   }
 
+  private int removable(RemovableQuotient q) {
+    int divisor = enclosedPower(of(q.variable()), q.order());
+    int quotient = emit(Operation.REMOVABLE_DIVIDE, of(q.numerator()), divisor, of(q.meanValue()));
+    return q.rest().isEmpty() ? quotient : emit(Operation.DIVIDE, quotient, of(q.rest().get()));
+  }
+
   /** Adding or subtracting 0, multiplying or dividing by 1. */
   private boolean unchanged(Operator operator, int right) {
     return switch (operator) {
@@ -172,35 +193,52 @@ final class TapeBuilder implements Expression.Visitor<Integer> {
   }
 
   private int power(int base, double exponent) {
-    if (constant(base)) {
-      return number(Math.pow(value(base), exponent));
-    }
     if (exponent == 0) {
       return number(1);
     }
-    double size = Math.abs(exponent);
-    boolean whole = size == Math.rint(size);
-    if (size > MOST_MULTIPLIED || 2 * size != Math.rint(2 * size)) {
-      return whole && powers == Powers.WHOLE && size <= Integer.MAX_VALUE
-          ? emit(new Instruction(Operation.INTEGER_POWER, base, -1, -1, exponent))
-          : emit(Operation.POWER, base, number(exponent));
+    if (constant(base) && purpose == Purpose.POINTS) {
+      return number(Math.pow(value(base), exponent));
     }
-    int positive = whole ? wholePower(base, (int) size) : halfPower(base, size);
-    return exponent > 0 ? positive : emit(Operation.DIVIDE, number(1), positive);
+    return purpose == Purpose.POINTS
+        ? multipliedPower(base, exponent)
+        : enclosedPower(base, exponent);
   }
 
-  private int halfPower(int base, double exponent) {
-    int root = emit(Operation.SQRT, base);
-    int whole = (int) exponent;
-    return whole == 0 ? root : emit(Operation.MULTIPLY, wholePower(base, whole), root);
+  private int reciprocal(int place) {
+    return emit(Operation.DIVIDE, number(1), place);
+  }
+
+  private int enclosedPower(int base, double exponent) {
+    double size = Math.abs(exponent);
+    int positive;
+    if (size == 1) {
+      positive = base;
+    } else if (size == Math.rint(size) && size <= Integer.MAX_VALUE) {
+      positive = emit(new Instruction(Operation.INTEGER_POWER, base, -1, -1, size));
+    } else {
+      positive =
+          size == HALF ? emit(Operation.SQRT, base) : emit(Operation.POWER, base, number(size));
+    }
+    return exponent > 0 ? positive : reciprocal(positive);
+  }
+
+  private int multipliedPower(int base, double exponent) {
+    double size = Math.abs(exponent);
+    if (size > MOST_MULTIPLIED || 2 * size != Math.rint(2 * size)) {
+      return emit(Operation.POWER, base, number(exponent));
+    }
+    int whole = (int) size;
+    int positive = whole == 0 ? -1 : wholePower(base, whole);
+    if (size != whole) {
+      int root = emit(Operation.SQRT, base);
+      positive = whole == 0 ? root : emit(Operation.MULTIPLY, positive, root);
+    }
+    return exponent > 0 ? positive : reciprocal(positive);
   }
 
   private int wholePower(int base, int exponent) {
     if (exponent == 1) {
       return base;
-    }
-    if (powers == Powers.WHOLE) {
-      return emit(new Instruction(Operation.INTEGER_POWER, base, -1, -1, exponent));
     }
     int half = wholePower(base, exponent / 2);
     int square = emit(Operation.MULTIPLY, half, half);

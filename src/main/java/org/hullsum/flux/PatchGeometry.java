@@ -8,8 +8,8 @@ import java.util.OptionalDouble;
 import org.apache.commons.numbers.core.Sum;
 import org.hullsum.expression.Expression;
 import org.hullsum.expression.VectorExpression;
+import org.hullsum.geometry.Bounds;
 import org.hullsum.numeric.Box3;
-import org.hullsum.numeric.Interval;
 import org.hullsum.numeric.Vector3;
 import org.hullsum.quadrature.Accuracy;
 import org.hullsum.quadrature.Integral;
@@ -50,6 +50,8 @@ public record PatchGeometry(
   private static final int SQUARES = 13;
   private static final int COMPONENTS = 16;
 
+  private static final double ROUNDING = 4 * Math.ulp(1.0);
+
   public PatchGeometry {
     Objects.requireNonNull(vectorArea, "vectorArea");
     Objects.requireNonNull(reference, "reference");
@@ -68,7 +70,7 @@ public record PatchGeometry(
    */
   public static PatchGeometry of(
       PulledBackSurface surface, Map<String, Double> values, int digits) {
-    Box3 box = coarseBox(surface, values);
+    Box3 box = Bounds.of(surface.surface(), values);
     Vector3 reference = box.centre();
     double size = box.diagonal() > 0 ? box.diagonal() : 1;
     List<ChartIntegral> charts = new ArrayList<>();
@@ -80,7 +82,9 @@ public record PatchGeometry(
       coarseArea += integral.coarseMeans(OptionalDouble.empty())[0];
       charts.add(integral);
     }
-    double absolute = Math.pow(10, -digits) * coarseArea / (2 * charts.size());
+    // Far from the origin positions carry no more digits than this.
+    double rounding = ROUNDING * (1 + reference.norm() / size);
+    double absolute = Math.max(Math.pow(10, -digits), rounding) * coarseArea / (2 * charts.size());
     Accuracy accuracy =
         new Accuracy(
             0,
@@ -125,37 +129,6 @@ public record PatchGeometry(
     addComponents(normal.times(offset.z()), all);
     addComponents(normal.times(halfSquare), all);
     return all;
-  }
-
-  private static Box3 coarseBox(PulledBackSurface surface, Map<String, Double> values) {
-    Box3 box = null;
-    int n = 17;
-    for (PulledBackChart chart : surface.charts()) {
-      VectorExpression r = chart.chart().position();
-      FormulaIntegrand e = new FormulaIntegrand(List.of(r.x(), r.y(), r.z()), values);
-      double[][] in = new double[2][n * n];
-      for (int i = 0; i < n; i++) {
-        for (int j = 0; j < n; j++) {
-          in[0][n * i + j] = i / (n - 1.0);
-          in[1][n * i + j] = j / (n - 1.0);
-        }
-      }
-      double[][] out = new double[3][n * n];
-      e.evaluate(n * n, in[0], in[1], out);
-      Box3 b = new Box3(hull(out[0]), hull(out[1]), hull(out[2]));
-      box = box == null ? b : box.hullWith(b);
-    }
-    return box;
-  }
-
-  private static Interval hull(double[] a) {
-    double low = a[0];
-    double high = a[0];
-    for (double x : a) {
-      low = Math.min(low, x);
-      high = Math.max(high, x);
-    }
-    return new Interval(low, high);
   }
 
   private static void addComponents(VectorExpression vector, List<Expression> all) {

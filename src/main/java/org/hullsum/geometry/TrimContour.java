@@ -20,13 +20,16 @@ import org.hullsum.numeric.Interval;
 final class TrimContour {
   private static final int SHALLOWEST = 6;
   private static final int DEEPEST = 12;
-  private static final int MOST_CELLS = 20_000;
+  private static final int MOST_CELLS = 3_000;
 
   /** Fewer undecided cells than this follow a small curve too coarsely. */
-  private static final int FEWEST_CELLS = 200;
+  private static final int FEWEST_CELLS = 48;
 
   /** How far from a curve's cells enclosures may leave a cell undecided, in cells. */
-  private static final int LOOSENESS = 3;
+  private static final int LOOSENESS = 5;
+
+  /** From this level on a body's face that runs along a side of the square may stay undecided. */
+  private static final int SIDE_LEVEL = 8;
 
   /** Corners and edges of a cell in the order of a left turn round it. */
   private static final int[] CORNER_I = {0, 1, 1, 0};
@@ -131,7 +134,8 @@ final class TrimContour {
     evaluateNodes();
     Set<Cell> mixed = new HashSet<>();
     cells.stream().filter(this::isMixed).forEach(mixed::add);
-    return cells.stream().allMatch(cell -> isNear(cell, mixed));
+    return cells.stream()
+        .allMatch(cell -> isNear(cell, mixed) || (level >= SIDE_LEVEL && isAlongSide(cell)));
   }
 
   private boolean isMixed(Cell cell) {
@@ -142,6 +146,13 @@ final class TrimContour {
       }
     }
     return false;
+  }
+
+  private boolean isAlongSide(Cell cell) {
+    int last = cellsPerSide() - 1;
+    int fromSide =
+        Math.min(Math.min(cell.i(), last - cell.i()), Math.min(cell.j(), last - cell.j()));
+    return fromSide < LOOSENESS;
   }
 
   private static boolean isNear(Cell cell, Set<Cell> mixed) {

@@ -7,6 +7,7 @@ import java.util.Optional;
 import java.util.Random;
 import org.hullsum.expression.Derivative;
 import org.hullsum.expression.Expression;
+import org.hullsum.expression.ExpressionParser;
 import org.hullsum.expression.Function;
 import org.hullsum.expression.Simplifier;
 import org.hullsum.expression.VectorExpression;
@@ -16,6 +17,8 @@ import org.hullsum.model.Input;
 import org.hullsum.model.Inputs;
 import org.hullsum.numeric.Vector3;
 import org.hullsum.problem.Place;
+import org.hullsum.problem.TextFault;
+import org.hullsum.units.WorkingUnits;
 
 /** Fields and inputs for the tests. */
 public final class TestFields {
@@ -44,6 +47,20 @@ public final class TestFields {
                 VectorExpression.of(Vector3.Y),
                 VectorExpression.of(Vector3.Z)));
     return new VectorField("field", components, divergence, cartesian, components, divergence);
+  }
+
+  /** A formula in x, y, z and t. */
+  public static Expression parse(String text) {
+    try {
+      return ExpressionParser.parse(text, List.of("x", "y", "z", "t"), WorkingUnits.SI).root();
+    } catch (TextFault fault) {
+      throw new IllegalStateException(fault);
+    }
+  }
+
+  /** A field by the text of its three components. */
+  public static VectorField parse(List<String> components) {
+    return field(parse(components.get(0)), parse(components.get(1)), parse(components.get(2)));
   }
 
   /** r/3 about a point: its divergence is 1. */

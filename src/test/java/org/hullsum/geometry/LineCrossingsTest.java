@@ -297,7 +297,7 @@ class LineCrossingsTest {
   }
 
   @Test
-  void boxFromSixGraphsWithCollapsingLimitsIsClosed() throws SurfaceFault {
+  void domeAndFloorOverCollapsingLimitsAreClosedTogether() throws SurfaceFault {
     Expression root = sqrt(number(1).minus(symbol("x").power(2)).minus(symbol("y").power(2)));
     Expression limit = sqrt(number(1).minus(symbol("x").power(2)));
     PlaneRegion disk = new PlaneRegion.Box(Span.of(-1, 1), new Span(limit.negated(), limit));
