@@ -75,7 +75,11 @@ final class CaseText {
     }
     addCount(parts, Severity.ERROR, "error");
     addCount(parts, Severity.WARNING, "warning");
-    return verdict + (parts.isEmpty() ? "" : " (" + String.join(", ", parts) + ")");
+    boolean contradiction =
+        audited.hasError() && audited.verdict().equals(Optional.of(Verdict.BALANCED));
+    return verdict
+        + (contradiction ? ", but something is wrong, see the findings" : "")
+        + (parts.isEmpty() ? "" : " (" + String.join(", ", parts) + ")");
   }
 
   private void addCount(List<String> parts, Severity severity, String noun) {
@@ -127,20 +131,24 @@ final class CaseText {
   }
 
   private void writeSurfaces() {
-    if (audited.surfaces().isEmpty()) {
+    List<SurfaceResult> surfaces =
+        audited.surfaces().stream()
+            .filter(s -> s.closed().isPresent() || s.enclosedVolume().isPresent())
+            .toList();
+    if (surfaces.isEmpty()) {
       return;
     }
     page.blank().line("Surfaces");
-    for (SurfaceResult surface : audited.surfaces()) {
+    for (SurfaceResult surface : surfaces) {
       page.paragraph(
           2,
           2,
           surface.volume()
               + ": "
-              + VerdictText.closedness(surface)
+              + VerdictText.closednessWord(surface)
               + surface
                   .enclosedVolume()
-                  .map(v -> " Encloses " + Figures.quoted(v, cubed(audited.lengthUnit())) + ".")
+                  .map(v -> ", encloses " + Figures.quoted(v, cubed(audited.lengthUnit())))
                   .orElse(""));
       surface.gaps().forEach(g -> page.paragraph(4, 2, gap(g)));
     }
@@ -152,13 +160,8 @@ final class CaseText {
         + (gap.between().isEmpty() ? "" : " between " + String.join(" and ", gap.between()))
         + " of "
         + Figures.quoted(gap.area(), unit.equals("1") ? "1" : unit + "2")
-        + " about ["
-        + Figures.quoted(gap.centre().x())
-        + ", "
-        + Figures.quoted(gap.centre().y())
-        + ", "
-        + Figures.quoted(gap.centre().z())
-        + "]"
+        + " about "
+        + Figures.vector(gap.centre())
         + (unit.equals("1") ? "" : " " + unit)
         + gap.length().map(l -> ", rim " + Figures.quoted(l, unit)).orElse("")
         + gap.fluxThrough()

@@ -50,7 +50,6 @@ final class ExplanationText {
         number
             + explanation.kind().word()
             + (explanation.on().isEmpty() ? "" : ": " + String.join(", ", explanation.on()))
-            + explanation.factor().map(f -> ", factor " + Figures.quoted(f)).orElse("")
             + " - explains "
             + Figures.percent(explanation.explained())
             + " of the residual of "

@@ -4,6 +4,7 @@ import java.math.BigDecimal;
 import java.math.MathContext;
 import java.math.RoundingMode;
 import java.util.Optional;
+import org.hullsum.numeric.Vector3;
 
 /**
  * Figures as text: as many digits as their error supports, never more than eight, and never in a
@@ -40,6 +41,25 @@ final class Figures {
   /** An error bound or a standard uncertainty, to two digits. */
   static String error(double value) {
     return significant(value, DIGITS_OF_ERROR);
+  }
+
+  /** A place or a direction, its components to one decimal: six digits of the largest. */
+  static String vector(Vector3 v) {
+    double largest = Math.max(Math.abs(v.x()), Math.max(Math.abs(v.y()), Math.abs(v.z())));
+    int decimals = largest == 0 ? 0 : DIGITS_IN_TEXT - 1 - exponent(largest);
+    return "["
+        + rounded(v.x(), decimals)
+        + ", "
+        + rounded(v.y(), decimals)
+        + ", "
+        + rounded(v.z(), decimals)
+        + "]";
+  }
+
+  private static String rounded(double value, int decimals) {
+    return Double.isFinite(value)
+        ? quoted(new BigDecimal(value).setScale(decimals, RoundingMode.HALF_EVEN).doubleValue())
+        : "-";
   }
 
   /** A figure that may not exist. */

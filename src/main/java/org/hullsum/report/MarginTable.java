@@ -38,13 +38,14 @@ final class MarginTable {
               "tolerance T",
               balance.tolerance().map(t -> rounded(t, unit)).orElse("-"),
               "balanced: |residual| + w <= T; imbalanced: |residual| - w > T");
-      case UNCERTAINTY ->
-          table.row("tolerance", "none", "balanced: |residual| <= w; imbalanced: |residual| > w");
+      case UNCERTAINTY -> {
+        table.row("tolerance", "none", "balanced: |residual| <= w; imbalanced: |residual| > w");
+        table.row(
+            "detectable",
+            balance.detectable().map(d -> rounded(d, unit)).orElse("-"),
+            "the smallest imbalance that would have shown");
+      }
     }
-    balance
-        .detectable()
-        .ifPresent(
-            d -> table.row("detectable", rounded(d, unit), "the smallest imbalance that shows"));
     table.row("throughput", rounded(balance.throughput(), unit), "what a relative tolerance is of");
     return table.lines();
   }

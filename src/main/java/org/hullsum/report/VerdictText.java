@@ -28,8 +28,7 @@ final class VerdictText {
     int inner = indent + 2;
     page.lines(inner, MarginTable.lines(balance));
     page.paragraph(inner, 2, "Means: " + meaning(balance));
-    closedness(audited, balance)
-        .ifPresent(c -> page.paragraph(inner, 2, "Closedness of the surface: " + c));
+    closedness(audited, balance).ifPresent(c -> page.paragraph(inner, 2, "Surface: " + c));
     balance
         .closedBy()
         .ifPresent(
@@ -91,13 +90,19 @@ final class VerdictText {
   }
 
   /** Whether a surface is closed, and why that is said. */
-  static String closedness(SurfaceResult surface) {
-    String word = surface.closed().map(c -> c ? "closed" : "OPEN").orElse("closedness not proved");
-    return word + surface.reason().map(r -> ": " + r).orElse("") + stop(surface.reason());
+  private static String closedness(SurfaceResult surface) {
+    String reason = surface.reason().map(r -> r.endsWith(".") ? r : r + ".").orElse("");
+    String word = closednessWord(surface);
+    if (reason.isEmpty()) {
+      return word + ".";
+    }
+    boolean saidInTheReason = reason.startsWith(word) || reason.startsWith("not applicable");
+    return saidInTheReason ? reason : word + ": " + reason;
   }
 
-  private static String stop(Optional<String> reason) {
-    return reason.filter(r -> r.endsWith(".")).isPresent() ? "" : ".";
+  /** Whether a surface is closed, in two or three words. */
+  static String closednessWord(SurfaceResult surface) {
+    return surface.closed().map(c -> c ? "closed" : "OPEN").orElse("closedness not proved");
   }
 
   private static void writeBudget(PageBuilder page, int indent, BalanceResult balance) {

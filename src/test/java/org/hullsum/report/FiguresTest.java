@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 
 import java.util.List;
 import java.util.Optional;
+import org.hullsum.numeric.Vector3;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
@@ -25,6 +26,12 @@ class FiguresTest {
   })
   void significantDigitsAreRoundedAndZerosLeftOut(double value, int digits, String text) {
     assertEquals(text, Figures.significant(value, digits));
+  }
+
+  @Test
+  void aVectorIsRoundedByItsLargestComponent() {
+    assertEquals("[0.3, 0, 1.1]", Figures.vector(new Vector3(0.3000001, -3.01547e-10, 1.1)));
+    assertEquals("[0, 0, 0]", Figures.vector(new Vector3(0, -0.0, 0)));
   }
 
   @Test
