@@ -89,12 +89,13 @@ final class KeptRegion {
       return Knowledge.KEPT;
     }
     Compiled c = compiled.get();
-    Interval[] result = new Interval[1];
-    c.intervals().evaluate(new Interval[] {u, v}, result, c.intervalWorkspace());
-    if (!result[0].contains(0)) {
+    double[] low = {u.low(), v.low()};
+    double[] high = {u.high(), v.high()};
+    c.intervals().evaluate(low, high, c.intervalWorkspace());
+    if (c.intervalWorkspace().low(0) > 0) {
       return Knowledge.KEPT;
     }
-    return result[0].high() <= 0 ? Knowledge.CUT_AWAY : Knowledge.UNDECIDED;
+    return c.intervalWorkspace().high(0) <= 0 ? Knowledge.CUT_AWAY : Knowledge.UNDECIDED;
   }
 
   /**
