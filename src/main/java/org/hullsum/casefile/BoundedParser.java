@@ -15,8 +15,8 @@ import org.snakeyaml.engine.v2.exceptions.YamlEngineException;
 import org.snakeyaml.engine.v2.parser.Parser;
 
 /**
- * A parser that gives up where a file nests too deep or uses what the format has not (tags, anchors to which nothing refers), before
- * anything recursive sees it.
+ * A parser that gives up where a file nests too deep or uses what the format has not (tags, anchors
+ * to which nothing refers), before anything recursive sees it.
  */
 final class BoundedParser implements Parser {
   /** A case file needs about ten levels. */

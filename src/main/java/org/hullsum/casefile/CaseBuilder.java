@@ -28,8 +28,7 @@ final class CaseBuilder {
   private final ProblemAccumulator problems;
   private final ValueReader values;
 
-  CaseBuilder(
-      FileTextReader.Content content, ReadOptions options, ProblemAccumulator problems) {
+  CaseBuilder(FileTextReader.Content content, ReadOptions options, ProblemAccumulator problems) {
     this.content = content;
     this.options = options;
     this.problems = problems;
@@ -104,8 +103,7 @@ final class CaseBuilder {
   }
 
   private void checkFormat(MapReader top) {
-    Optional<YamlText> format =
-        top.require("format").flatMap(v -> values.text(v, "`format`"));
+    Optional<YamlText> format = top.require("format").flatMap(v -> values.text(v, "`format`"));
     if (format.isPresent() && !format.get().text().equals(FORMAT)) {
       problems.add(
           ProblemKind.WRONG_VALUE,

@@ -18,8 +18,7 @@ public final class CaseReader {
   /** Reads a file; never throws for what is wrong with it. */
   public static ReadOutcome read(Path file, ReadOptions options) {
     ProblemAccumulator problems = new ProblemAccumulator();
-    Optional<FileTextReader.Content> content =
-        FileTextReader.read(file, options.name(), problems);
+    Optional<FileTextReader.Content> content = FileTextReader.read(file, options.name(), problems);
     Optional<Case> found =
         content.flatMap(
             c ->

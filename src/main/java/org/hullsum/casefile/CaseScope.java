@@ -34,7 +34,9 @@ final class CaseScope {
   private Optional<Place> firstUseOfTime = Optional.empty();
 
   CaseScope(
-      ProblemAccumulator problems, WorkingUnits working, Optional<UncertaintyMeaning> usualMeaning) {
+      ProblemAccumulator problems,
+      WorkingUnits working,
+      Optional<UncertaintyMeaning> usualMeaning) {
     this.problems = problems;
     this.working = working;
     this.usualMeaning = usualMeaning;

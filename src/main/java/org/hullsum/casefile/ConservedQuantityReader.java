@@ -71,15 +71,13 @@ final class ConservedQuantityReader {
 
   private Optional<ConservedQuantity> own(MapReader map) {
     Optional<String> name = map.require("name").flatMap(v -> values.freeText(v, "`name`"));
-    Optional<Noted<Unit>> noted =
-        map.require("unit").flatMap(v -> values.unit(v, "`unit`"));
+    Optional<Noted<Unit>> noted = map.require("unit").flatMap(v -> values.unit(v, "`unit`"));
     noted.ifPresent(u -> u.notes().forEach(scope::note));
     Optional<Unit> unit = noted.map(Noted::value);
     if (unit.isPresent() && unit.get().offset() != 0) {
       values
           .problems()
-          .add(
-              ProblemKind.UNIT, map.placeOf("unit"), "a rate is not in " + unit.get().code());
+          .add(ProblemKind.UNIT, map.placeOf("unit"), "a rate is not in " + unit.get().code());
       return Optional.empty();
     }
     return Together.of(name, unit, ConservedQuantity::new);

@@ -21,8 +21,7 @@ final class DensityReader {
    * @param wanted what it must measure, empty for any
    * @param because what it is for, such as {@code a mass rate per area}
    */
-  Optional<Formula> density(
-      MapReader map, String key, Optional<Dimension> wanted, String because) {
+  Optional<Formula> density(MapReader map, String key, Optional<Dimension> wanted, String because) {
     Map<String, Optional<Dimension>> variables = Need.SPACE_AND_TIME;
     if (formulas.scope().working().none()) {
       refuseUnit(map);

@@ -6,7 +6,6 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import org.hullsum.expression.Expression;
 import org.hullsum.expression.VectorExpression;
 import org.hullsum.field.AxisFrame;
 import org.hullsum.field.CoordinateSystems;
@@ -166,7 +165,9 @@ final class FieldReader {
     boolean needed = !none && (map.has("vector") || map.has("gradient"));
     if (none && map.has("unit")) {
       problems.add(
-          ProblemKind.UNIT, map.placeOf("unit"), "with `units: none` no unit is written; leave it out");
+          ProblemKind.UNIT,
+          map.placeOf("unit"),
+          "with `units: none` no unit is written; leave it out");
       return Optional.empty();
     }
     Optional<Noted<Unit>> unit =
@@ -273,8 +274,7 @@ final class FieldReader {
             unit.map(Unit::dimension)));
   }
 
-  private boolean agrees(
-      Optional<Dimension> found, Optional<Unit> unit, Place place, String what) {
+  private boolean agrees(Optional<Dimension> found, Optional<Unit> unit, Place place, String what) {
     if (found.isPresent() && unit.isPresent() && !found.get().equals(unit.get().dimension())) {
       problems.add(
           ProblemKind.DIMENSION,
@@ -334,8 +334,7 @@ final class FieldReader {
     Optional<FieldEntry> carrier = map.get("carrier").flatMap(this::reference);
     Optional<Formula> content =
         map.require("content")
-            .flatMap(
-                v -> formulas.formula(v, need("`content`", coordinates, Optional.empty())));
+            .flatMap(v -> formulas.formula(v, need("`content`", coordinates, Optional.empty())));
     if (carrier.isEmpty() || content.isEmpty()) {
       return Optional.empty();
     }
@@ -345,8 +344,7 @@ final class FieldReader {
       return Optional.empty();
     }
     VectorField field =
-        VectorFields.carried(
-            name, carrier.get().field(), coordinates, content.get().expression());
+        VectorFields.carried(name, carrier.get().field(), coordinates, content.get().expression());
     return Optional.of(new FieldEntry(field, unit.isPresent() ? unit.map(Unit::dimension) : found));
   }
 }

@@ -55,7 +55,9 @@ final class FileTextReader {
       problems.add(
           ProblemKind.LIMIT_EXCEEDED,
           whole,
-          "the file is larger than " + (MOST_BYTES >> 20) + " MB; large tables belong in CSV files");
+          "the file is larger than "
+              + (MOST_BYTES >> 20)
+              + " MB; large tables belong in CSV files");
       return Optional.empty();
     }
     return decode(bytes, name, problems)
@@ -100,8 +102,7 @@ final class FileTextReader {
               : "this is not UTF-8 text; save the file as UTF-8");
       return Optional.empty();
     }
-    String body =
-        !text.isEmpty() && text.charAt(0) == BYTE_ORDER_MARK ? text.substring(1) : text;
+    String body = !text.isEmpty() && text.charAt(0) == BYTE_ORDER_MARK ? text.substring(1) : text;
     if (tooLongALine(new SourceText(name, body), problems)) {
       return Optional.empty();
     }
@@ -122,7 +123,10 @@ final class FileTextReader {
         problems.add(
             ProblemKind.LIMIT_EXCEEDED,
             source.place(source.indexOf(line, 0)),
-            "this line has " + length + " characters; no line of a case has more than " + LONGEST_LINE);
+            "this line has "
+                + length
+                + " characters; no line of a case has more than "
+                + LONGEST_LINE);
         return true;
       }
     }

@@ -5,7 +5,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import org.hullsum.expression.Expression;
 import org.hullsum.model.FluxStatement;
 import org.hullsum.model.StatedFlux;
 import org.hullsum.numeric.Interval;
@@ -71,10 +70,7 @@ final class FluxReader {
     if (word.isPresent()) {
       return values
           .word(word.get(), "`flux` (or a mapping such as {field: NAME})", WORDS)
-          .map(
-              w ->
-                  new StatedFlux(
-                      bare(w), Optional.empty(), Optional.empty(), item.place()));
+          .map(w -> new StatedFlux(bare(w), Optional.empty(), Optional.empty(), item.place()));
     }
     Optional<MapReader> section = values.section(item, Section.FLUX);
     if (section.isEmpty()) {
@@ -161,8 +157,7 @@ final class FluxReader {
               .map(f -> new FluxStatement.Density(f.expression()));
       case "metered" -> map.get(kind).flatMap(v -> metered(v, map, owner.patch(), rate));
       case "profile" ->
-          map.get(kind)
-              .flatMap(v -> profiles.read(v, owner.surface(), owner.patch(), perArea));
+          map.get(kind).flatMap(v -> profiles.read(v, owner.surface(), owner.patch(), perArea));
       default -> word(map, kind);
     };
   }
@@ -188,7 +183,9 @@ final class FluxReader {
               + entry.get().field().name()
               + "` is in "
               + found.get()
-              + (factor ? ", but with this `times` a flux of the quantity `" : ", but a flux of the quantity `")
+              + (factor
+                  ? ", but with this `times` a flux of the quantity `"
+                  : ", but a flux of the quantity `")
               + rates.name()
               + "` needs "
               + wanted.get()
@@ -204,8 +201,7 @@ final class FluxReader {
       values.section(value, Section.METERED);
       return Optional.empty();
     }
-    boolean fixed =
-        map.get("fixed").flatMap(v -> values.flag(v, "`fixed`")).orElse(false);
+    boolean fixed = map.get("fixed").flatMap(v -> values.flag(v, "`fixed`")).orElse(false);
     Need need = new Need("`metered`", Map.of(), rate, Optional.empty());
     Optional<Formula> figure = measured.measured(value, patch + " metered", need);
     if (figure.isPresent() && Figures.isBareName(figure.get().expression())) {
@@ -220,9 +216,11 @@ final class FluxReader {
   }
 
   private void noteExact(String patch, YamlValue value, String input, boolean fixed) {
-    boolean inline = formulas.scope().inputs().containsKey(input)
-        && formulas.scope().inputs().get(input).inline();
-    boolean stated = value.asText().filter(t -> MeasuredReader.hasUncertainty(t.text())).isPresent();
+    boolean inline =
+        formulas.scope().inputs().containsKey(input)
+            && formulas.scope().inputs().get(input).inline();
+    boolean stated =
+        value.asText().filter(t -> MeasuredReader.hasUncertainty(t.text())).isPresent();
     if (inline && !stated && !fixed) {
       formulas
           .scope()
@@ -248,8 +246,7 @@ final class FluxReader {
       return Optional.empty();
     }
     if (low.getAsDouble() > high.getAsDouble()) {
-      problems.add(
-          ProblemKind.WRONG_VALUE, value.place(), "`within` states the lower bound first");
+      problems.add(ProblemKind.WRONG_VALUE, value.place(), "`within` states the lower bound first");
       return Optional.empty();
     }
     return Optional.of(new Interval(low.getAsDouble(), high.getAsDouble()));

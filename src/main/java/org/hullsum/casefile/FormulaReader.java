@@ -59,10 +59,7 @@ final class FormulaReader {
     } catch (TextFault fault) {
       scope
           .problems()
-          .add(
-              fault.kind(),
-              text.place(fault.start()),
-              fault.getMessage() + YamlTraps.hint(text));
+          .add(fault.kind(), text.place(fault.start()), fault.getMessage() + YamlTraps.hint(text));
       return Optional.empty();
     }
   }
@@ -76,8 +73,7 @@ final class FormulaReader {
       if (need.dimension().isPresent()
           && found.isPresent()
           && !found.get().equals(need.dimension().get())) {
-        throw parsed.faultAt(
-            parsed.root(), ProblemKind.DIMENSION, mismatch(need, found.get()));
+        throw parsed.faultAt(parsed.root(), ProblemKind.DIMENSION, mismatch(need, found.get()));
       }
       Expression root = parsed.root();
       if (need.stated().isPresent() && found.isEmpty()) {

@@ -52,8 +52,7 @@ final class FormulaShapeReader {
     Need need =
         Need.length("the formula of the graph")
             .in(Need.both(length(subject.first()), length(subject.second())));
-    Optional<Expression> value =
-        map.get(subject.word()).flatMap(v -> formulas.expression(v, need));
+    Optional<Expression> value = map.get(subject.word()).flatMap(v -> formulas.expression(v, need));
     Optional<PlaneRegion> region = map.require("over").flatMap(v -> region(v, subject));
     return Together.of(value, region, (f, over) -> new GraphShape(subject, f, over));
   }
@@ -141,8 +140,10 @@ final class FormulaShapeReader {
     Optional<VectorExpression> point =
         map.require("point").flatMap(e -> formulas.vector(e, Need.length("`point`").in(both)));
     return Together.of(
-        point, u, v, (position, first, second) ->
-            new ParametricShape(position, first.span(), second.span()));
+        point,
+        u,
+        v,
+        (position, first, second) -> new ParametricShape(position, first.span(), second.span()));
   }
 
   Optional<Shape> revolution(MapReader map) {
@@ -186,10 +187,8 @@ final class FormulaShapeReader {
     Map<String, Optional<Dimension>> inS =
         s.map(range -> range.variable("s")).orElse(Map.of("s", Optional.empty()));
     return Together.of(
-        map.require("radius")
-            .flatMap(v -> formulas.expression(v, Need.length("`radius`").in(inS))),
-        map.require("height")
-            .flatMap(v -> formulas.expression(v, Need.length("`height`").in(inS))),
+        map.require("radius").flatMap(v -> formulas.expression(v, Need.length("`radius`").in(inS))),
+        map.require("height").flatMap(v -> formulas.expression(v, Need.length("`height`").in(inS))),
         s,
         (radius, height, range) -> new Profile.Curve(radius, height, range.span()));
   }

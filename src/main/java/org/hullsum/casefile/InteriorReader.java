@@ -18,8 +18,7 @@ final class InteriorReader {
   private final DensityReader densities;
   private final Rates rates;
 
-  InteriorReader(
-      FormulaReader formulas, FieldReader fields, MeasuredReader measured, Rates rates) {
+  InteriorReader(FormulaReader formulas, FieldReader fields, MeasuredReader measured, Rates rates) {
     this.values = formulas.values();
     this.fields = fields;
     this.measured = measured;

@@ -75,8 +75,7 @@ final class MeasuredReader {
     return define(text, name, number, 0, Double.POSITIVE_INFINITY, formula.dimension());
   }
 
-  private Optional<Formula> input(
-      YamlText text, MeasuredQuantity figure, String name, Need need) {
+  private Optional<Formula> input(YamlText text, MeasuredQuantity figure, String name, Need need) {
     WorkingUnits working = scope.working();
     Optional<Dimension> dimension =
         figure.quantity().bare() || working.none()

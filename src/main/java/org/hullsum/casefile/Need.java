@@ -11,7 +11,8 @@ import org.hullsum.units.Unit;
  * What a place of a case needs of the number, quantity or formula that stands there.
  *
  * @param what what stands there, such as {@code the radius}
- * @param variables the coordinates that a formula there may use, each with its dimension if it has one
+ * @param variables the coordinates that a formula there may use, each with its dimension if it has
+ *     one
  * @param dimension what it must measure; empty for any
  * @param stated the unit that the case states for it; a bare number alone is in that unit
  */

@@ -85,8 +85,7 @@ final class ParameterReader {
           }
           SourceText source = new SourceText(origin, value);
           stated.put(
-              name,
-              new YamlText(value, YamlText.Style.PLAIN, false, 0, value.length(), source));
+              name, new YamlText(value, YamlText.Style.PLAIN, false, 0, value.length(), source));
         });
   }
 
@@ -169,8 +168,7 @@ final class ParameterReader {
       measured.figure(text).ifPresent(figure -> defineFigure(name, place, figure));
       return;
     }
-    Optional<Formula> formula =
-        formulas.formula(text, Need.any("the parameter `" + name + "`"));
+    Optional<Formula> formula = formulas.formula(text, Need.any("the parameter `" + name + "`"));
     Optional<Double> value = formula.map(Formula::expression).flatMap(scope::value);
     if (value.isEmpty()) {
       return;

@@ -50,7 +50,9 @@ final class PatchReader {
     Optional<YamlMap> map = values.map(value, "`patches`", "from names to patches");
     if (map.isPresent() && map.get().entries().isEmpty()) {
       problems.add(
-          ProblemKind.MISSING_KEY, value.place(), "`patches` names one patch or more; here is none");
+          ProblemKind.MISSING_KEY,
+          value.place(),
+          "`patches` names one patch or more; here is none");
     }
     map.ifPresent(m -> m.entries().forEach(this::declare));
     List<Patch> patches = new ArrayList<>();
@@ -93,8 +95,7 @@ final class PatchReader {
         map.require("flux")
             .map(v -> fluxes.read(v, entry.name(), map.has("surface"), surface))
             .orElse(List.of());
-    List<Claim> claims =
-        map.get("claim").map(v -> claims(v, entry.name())).orElse(List.of());
+    List<Claim> claims = map.get("claim").map(v -> claims(v, entry.name())).orElse(List.of());
     return sides.map(
         s ->
             new Patch(
@@ -138,8 +139,7 @@ final class PatchReader {
       }
       return Optional.empty();
     }
-    Sides sides =
-        new Sides(leaves.orElse(Volume.SURROUNDINGS), enters.orElse(Volume.SURROUNDINGS));
+    Sides sides = new Sides(leaves.orElse(Volume.SURROUNDINGS), enters.orElse(Volume.SURROUNDINGS));
     if (sides.leaves().equals(Volume.SURROUNDINGS) && sides.enters().equals(Volume.SURROUNDINGS)) {
       problems.add(
           ProblemKind.WRONG_VALUE,

@@ -15,10 +15,10 @@ import org.hullsum.expression.VectorExpression;
  *   <li>laminar: 1 − d²/R²; mean 1/2 (Hagen–Poiseuille)
  *   <li>uniform: 1; mean 1
  *   <li>log law of a rough wall with equivalent sand roughness E: ln(1 + 30 y/E) / ln(1 + 30 R/E)
- *       with y = R − d, which vanishes at the wall and tends to Nikuradse's rough-pipe law
- *       u/u* = (1/κ) ln(30 y/E) away from it (J. Nikuradse, VDI-Forschungsheft 361, 1933; from
- *       memory). With a = 30 R/E and L = ln(1 + a) the mean is
- *       2 [((1+a)L − a)/a − (L/2 − 1/4 + 1/(2a) − L/(2a²))] / L
+ *       with y = R − d, which vanishes at the wall and tends to Nikuradse's rough-pipe law u/u* =
+ *       (1/κ) ln(30 y/E) away from it (J. Nikuradse, VDI-Forschungsheft 361, 1933; from memory).
+ *       With a = 30 R/E and L = ln(1 + a) the mean is 2 [((1+a)L − a)/a − (L/2 − 1/4 + 1/(2a) −
+ *       L/(2a²))] / L
  * </ul>
  *
  * <p>The root of the power law is taken of the square of 1 − d/R, so that a rounding of d beyond R
@@ -48,8 +48,7 @@ record ProfileLaw(Expression share, Expression meanShare, String text) {
     Expression fromWall = ONE.minus(distance(disk).over(disk.radius()));
     Expression exponent = ONE.over(TWO.times(n));
     Expression share = new Expression.Binary(Operator.POWER, fromWall.power(2), exponent);
-    Expression mean =
-        TWO.times(n.power(2)).over(n.plus(ONE).times(TWO.times(n).plus(ONE)));
+    Expression mean = TWO.times(n.power(2)).over(n.plus(ONE).times(TWO.times(n).plus(ONE)));
     return new ProfileLaw(share, mean, "power law, n = " + printed);
   }
 

@@ -26,9 +26,7 @@ final class ShapeReader {
     Optional<YamlList> points =
         map.require("points")
             .flatMap(v -> parts.values().list(v, "`points`", "of three points or more"));
-    return points
-        .flatMap(list -> parts.points(list.items(), "`points`"))
-        .map(PolygonShape::new);
+    return points.flatMap(list -> parts.points(list.items(), "`points`")).map(PolygonShape::new);
   }
 
   Optional<Shape> rectangle(MapReader map) {
@@ -103,7 +101,6 @@ final class ShapeReader {
         parts.point(map, "centre"),
         parts.length(map, "ring-radius"),
         parts.length(map, "tube-radius"),
-        (centre, ring, radius) ->
-            new TorusShape(centre, axis, ring, radius, azimuth, tube, zero));
+        (centre, ring, radius) -> new TorusShape(centre, axis, ring, radius, azimuth, tube, zero));
   }
 }

@@ -50,7 +50,8 @@ final class SourceText {
   /** The text of a line without its end; lines count from 0. */
   String line(int line) {
     int end = line + 1 < lineStarts.length ? lineStarts[line + 1] : text.length();
-    while (end > lineStarts[line] && (text.charAt(end - 1) == '\n' || text.charAt(end - 1) == '\r')) {
+    while (end > lineStarts[line]
+        && (text.charAt(end - 1) == '\n' || text.charAt(end - 1) == '\r')) {
       end--;
     }
     return text.substring(lineStarts[line], end);

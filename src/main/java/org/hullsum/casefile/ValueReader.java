@@ -160,8 +160,7 @@ final class ValueReader {
   void wrongType(YamlValue value, String what, String expected) {
     String hint = value.asText().map(YamlTraps::hint).orElse("");
     if (value.asText().filter(YamlText::missing).isPresent()) {
-      problems.add(
-          ProblemKind.MISSING_KEY, value.place(), what + " is missing; it is " + expected);
+      problems.add(ProblemKind.MISSING_KEY, value.place(), what + " is missing; it is " + expected);
       return;
     }
     problems.add(

@@ -117,8 +117,7 @@ final class VolumeReader {
   }
 
   List<Envelope> envelopes(YamlValue value, TolerancesReader tolerances) {
-    Optional<YamlMap> map =
-        values.map(value, "`envelopes`", "from names to lists of volumes");
+    Optional<YamlMap> map = values.map(value, "`envelopes`", "from names to lists of volumes");
     List<Envelope> envelopes = new ArrayList<>();
     map.ifPresent(m -> m.entries().forEach(e -> envelopes.add(envelope(e, tolerances))));
     return envelopes;
@@ -168,8 +167,7 @@ final class VolumeReader {
       }
     }
     if (list.isPresent() && list.get().items().isEmpty()) {
-      problems.add(
-          ProblemKind.WRONG_VALUE, value.place(), "an envelope holds one volume or more");
+      problems.add(ProblemKind.WRONG_VALUE, value.place(), "an envelope holds one volume or more");
     }
     return List.copyOf(members);
   }

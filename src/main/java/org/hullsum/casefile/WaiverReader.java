@@ -38,8 +38,7 @@ final class WaiverReader {
   private Optional<Waiver> waiver(MapReader map) {
     Optional<FindingCode> code = map.require("finding").flatMap(this::code);
     Optional<String> where = map.require("where").flatMap(this::where);
-    Optional<String> because =
-        map.require("because").flatMap(v -> values.freeText(v, "`because`"));
+    Optional<String> because = map.require("because").flatMap(v -> values.freeText(v, "`because`"));
     Optional<String> by = map.require("by").flatMap(v -> values.freeText(v, "`by`"));
     Optional<LocalDate> until = map.get("until").flatMap(this::date);
     return Together.of(

@@ -14,8 +14,7 @@ final class YamlFaults {
 
   private YamlFaults() {}
 
-  static void report(
-      YamlEngineException fault, SourceText source, ProblemAccumulator problems) {
+  static void report(YamlEngineException fault, SourceText source, ProblemAccumulator problems) {
     if (fault instanceof BoundedParser.Refusal refusal) {
       problems.add(refusal.kind(), place(refusal.mark(), source), refusal.getMessage());
     } else if (fault instanceof MarkedYamlEngineException marked) {
@@ -30,7 +29,9 @@ final class YamlFaults {
     String message = String.valueOf(fault.getMessage());
     if (message.toLowerCase(Locale.ROOT).contains("aliases")) {
       problems.add(
-          ProblemKind.LIMIT_EXCEEDED, source.wholeFile(), "the file uses more aliases than allowed");
+          ProblemKind.LIMIT_EXCEEDED,
+          source.wholeFile(),
+          "the file uses more aliases than allowed");
     } else {
       problems.add(
           ProblemKind.SYNTAX, source.wholeFile(), "this is not YAML: " + firstLine(message));
@@ -71,8 +72,7 @@ final class YamlFaults {
   }
 
   /** Faults that have a name of their own. */
-  private static String trap(
-      MarkedYamlEngineException fault, SourceText source, Place place) {
+  private static String trap(MarkedYamlEngineException fault, SourceText source, Place place) {
     String said = String.valueOf(fault.getProblem());
     if (said.contains("another document")) {
       return "a case file holds one document; here a second one begins";

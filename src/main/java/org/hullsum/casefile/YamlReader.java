@@ -108,7 +108,9 @@ final class YamlReader {
     }
     if (node.isRecursive()) {
       problems.add(
-          ProblemKind.WRONG_VALUE, place(node.getStartMark()), "this value holds itself by an alias");
+          ProblemKind.WRONG_VALUE,
+          place(node.getStartMark()),
+          "this value holds itself by an alias");
       return Optional.empty();
     }
     Optional<YamlValue> value =

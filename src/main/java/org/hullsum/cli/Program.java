@@ -3,6 +3,7 @@ package org.hullsum.cli;
 import java.io.OutputStream;
 import java.time.Clock;
 import java.util.List;
+import org.hullsum.casefile.CaseSchema;
 import picocli.CommandLine;
 import picocli.CommandLine.Help.Ansi;
 import picocli.CommandLine.Model.CommandSpec;

@@ -75,8 +75,7 @@ final class NativeForm {
     Expression third = derivative(f, 2);
     return switch (coordinates.kind()) {
       case CARTESIAN -> new VectorExpression(first, second, third);
-      case CYLINDRICAL ->
-          new VectorExpression(first, second.over(r), third).simplified();
+      case CYLINDRICAL -> new VectorExpression(first, second.over(r), third).simplified();
       case SPHERICAL ->
           new VectorExpression(
                   first,
@@ -102,8 +101,7 @@ final class NativeForm {
     if (coordinates.kind() == Coordinates.Kind.CARTESIAN) {
       return f;
     }
-    VectorExpression placed =
-        f.replace(guarded ? guarded() : coordinates.definitions());
+    VectorExpression placed = f.replace(guarded ? guarded() : coordinates.definitions());
     List<VectorExpression> unit = coordinates.unitVectors();
     return unit.get(0)
         .times(placed.x())

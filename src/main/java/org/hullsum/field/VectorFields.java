@@ -58,9 +58,7 @@ public final class VectorFields {
     VectorExpression gradient = new NativeForm(CoordinateSystems.cartesian()).gradient(c);
     Expression divergence = c.times(carrier.divergence()).plus(carrier.cartesian().dot(gradient));
     return inCartesian(
-        name,
-        carrier.cartesian().times(c).simplified(),
-        Simplifier.simplify(divergence));
+        name, carrier.cartesian().times(c).simplified(), Simplifier.simplify(divergence));
   }
 
   private static VectorField of(
