@@ -98,12 +98,13 @@ final class GapIntegration {
         carriers.stream().map(c -> fluxes.prepare(Optional.of(disk), stated(c, audit))).toList();
     List<Estimate> outward = new ArrayList<>();
     List<Estimate> divergence = new ArrayList<>();
-    for (OptionalDouble instant : instants) {
+    for (int i = 0; i < instants.size(); i++) {
+      OptionalDouble instant = instants.get(i);
       List<Estimate> parts = new ArrayList<>();
       for (PreparedFlux flux : prepared) {
         PatchAudit.estimate(flux.at(instant), scales.rate()).ifPresent(parts::add);
       }
-      VolumeIntegral inside = volumes.integrate(closed, density, instant);
+      VolumeIntegral inside = volumes.integrate(closed, density, instant, audit.enough(i, digits));
       if (parts.size() < prepared.size() || inside.value().isEmpty()) {
         return Optional.empty();
       }

@@ -28,6 +28,7 @@ final class InteriorIntegration {
   private final VolumeIntegrator integrator;
   private final List<OptionalDouble> instants;
   private final Scales scales;
+  private final int digits;
 
   InteriorIntegration(
       InputSensitivity inputs, List<OptionalDouble> instants, int digits, Scales scales) {
@@ -35,6 +36,7 @@ final class InteriorIntegration {
     this.integrator = new VolumeIntegrator(inputs, digits);
     this.instants = List.copyOf(instants);
     this.scales = scales;
+    this.digits = digits;
   }
 
   /**
@@ -161,7 +163,8 @@ final class InteriorIntegration {
           rates.add(missing(kind, formula, noRegion.get()));
         } else {
           VolumeIntegral integral =
-              integrator.integrate(surface.boundary(), density, instants.get(i));
+              integrator.integrate(
+                  surface.boundary(), density, instants.get(i), surface.enough(i, digits));
           rates.add(rate(kind, sign, integral, formula.orElse(kind)));
         }
       }

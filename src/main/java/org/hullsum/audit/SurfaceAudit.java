@@ -8,6 +8,7 @@ import org.hullsum.closure.FoundFacing;
 import org.hullsum.closure.MomentClosure;
 import org.hullsum.closure.VolumeFacings;
 import org.hullsum.flux.BoundaryPatch;
+import org.hullsum.flux.PatchFlux;
 import org.hullsum.model.Volume;
 import org.hullsum.numeric.Vector3;
 
@@ -108,6 +109,20 @@ record SurfaceAudit(
               signs.orElseThrow().get(i)));
     }
     return boundary;
+  }
+
+  /**
+   * An error of an interior that no balance would notice: 10^−digits of half of what flows through
+   * the surface, in working units.
+   */
+  double enough(int instant, int digits) {
+    double flowing = 0;
+    for (PatchAudit patch : patches) {
+      for (PatchFlux flux : patch.fluxes().get(instant)) {
+        flowing += 0.5 * flux.magnitude();
+      }
+    }
+    return Double.isFinite(flowing) ? Math.pow(10, -digits) * flowing : 0;
   }
 
   /** For the reports; the flux through a gap where it is known. */

@@ -83,20 +83,25 @@ final class ConeRoute {
    * Integrates with the cones' common apex at p.
    *
    * @param relative accuracy relative to ∭|g|
+   * @param enough an error that is small enough whatever ∭|g|, so that a density that is nothing
+   *     but rounding is not chased
    * @param limit largest number of points of each chart
    */
-  Outcome from(Vector3 apex, double relative, long limit) {
+  Outcome from(Vector3 apex, double relative, double enough, long limit) {
     Densities evaluated = new Densities(densities, constants, instant, size, RayIntegrals.BLOCK);
     Coarse coarse = look(evaluated, apex);
     double magnitude = Math.max(coarse.magnitude, LEAST_SHARE * coarse.coneMagnitude);
-    Totals totals = pass(evaluated, apex, coarse, relative * magnitude, limit);
-    if (totals.isFinite() && totals.errorBound(0) > relative * totals.magnitude()) {
+    Totals totals = pass(evaluated, apex, coarse, Math.max(relative * magnitude, enough), limit);
+    if (totals.isFinite()
+        && totals.errorBound(0) > Math.max(relative * totals.magnitude(), enough)) {
       // The coarse look took the region for larger than it is.
       long spent = totals.evaluations;
-      totals = pass(evaluated, apex, coarse, relative * totals.magnitude(), limit);
+      totals =
+          pass(evaluated, apex, coarse, Math.max(relative * totals.magnitude(), enough), limit);
       totals.evaluations += spent;
     }
-    if (totals.isFinite() && totals.magnitudeError() > MAGNITUDE_ACCURACY * totals.magnitude()) {
+    double loose = Math.max(MAGNITUDE_ACCURACY * totals.magnitude(), enough);
+    if (totals.isFinite() && totals.magnitudeError() > loose) {
       measureMagnitude(totals, limit);
     }
     return totals.outcome();

@@ -63,9 +63,11 @@ public final class VolumeIntegrator {
    *
    * @param boundary the closed boundary of the region, each patch with its found facing
    * @param density a formula in {@code x y z t} and inputs
+   * @param enough an error that is small enough whatever ∭|g| dV, such as a small part of what
+   *     flows through the boundary; 0 to ask for the relative accuracy alone
    */
   public VolumeIntegral integrate(
-      List<BoundaryPatch> boundary, Expression density, OptionalDouble instant) {
+      List<BoundaryPatch> boundary, Expression density, OptionalDouble instant, double enough) {
     Expression g = Simplifier.simplify(density);
     EnclosedRegion region = EnclosedRegion.of(boundary);
     if (Collections.disjoint(Symbols.in(g), SPACE)) {
@@ -80,7 +82,7 @@ public final class VolumeIntegrator {
     Optional<VolumeIntegral> best = Optional.empty();
     long limit = FIRST_LIMIT;
     for (Vector3 apex : apexes(region)) {
-      ConeRoute.Outcome outcome = cones.from(apex, relative, limit);
+      ConeRoute.Outcome outcome = cones.from(apex, relative, enough, limit);
       limit = OTHER_LIMIT;
       VolumeIntegral integral = integral(outcome, apex);
       if (outcome.status() == Integral.Status.REACHED) {
@@ -189,7 +191,7 @@ public final class VolumeIntegrator {
       ConeRoute cones =
           new ConeRoute(
               boundary, List.of(g), values, instant, EnclosedRegion.of(boundary).box().diagonal());
-      ends[side] = cones.from(apex, DIFFERENCE_ACCURACY, FIRST_LIMIT).values().get(0);
+      ends[side] = cones.from(apex, DIFFERENCE_ACCURACY, 0, FIRST_LIMIT).values().get(0);
     }
     return (ends[1] - ends[0]) / (2 * step);
   }

@@ -148,7 +148,7 @@ class SensitivityTest {
             patch(wall()), patch(disk(TOP, Vector3.Z)), patch(disk(BOTTOM, Vector3.Z.negated())));
     VolumeIntegral integral =
         new VolumeIntegrator(INPUTS, 9)
-            .integrate(boundary, L.times(TestFields.Z), OptionalDouble.empty());
+            .integrate(boundary, L.times(TestFields.Z), OptionalDouble.empty(), 0);
     double value = Math.PI * RADIUS * RADIUS * LIFT * DEPTH * DEPTH / 2;
     assertEquals(value, integral.value().orElseThrow(), integral.errorBound());
     assertEquals(value / LIFT, integral.sensitivities().get("lift"), 1e-6 * value);
@@ -162,7 +162,7 @@ class SensitivityTest {
         List.of(
             patch(wall()), patch(disk(TOP, Vector3.Z)), patch(disk(BOTTOM, Vector3.Z.negated())));
     VolumeIntegral integral =
-        new VolumeIntegrator(INPUTS, 9).integrate(boundary, L, OptionalDouble.empty());
+        new VolumeIntegrator(INPUTS, 9).integrate(boundary, L, OptionalDouble.empty(), 0);
     double volume = Math.PI * RADIUS * RADIUS * DEPTH;
     assertEquals(LIFT * volume, integral.value().orElseThrow(), integral.errorBound() + 1e-14);
     assertEquals(volume, integral.sensitivities().get("lift"), 1e-6 * volume);

@@ -36,7 +36,7 @@ class VolumeIntegratorTest {
 
   private static VolumeIntegral integrate(Assembly assembly, Expression density) {
     return new VolumeIntegrator(TestFields.noInputs(), DIGITS)
-        .integrate(boundary(assembly), density, OptionalDouble.empty());
+        .integrate(boundary(assembly), density, OptionalDouble.empty(), 0);
   }
 
   static Stream<Arguments> assembliesWithSeeds() {

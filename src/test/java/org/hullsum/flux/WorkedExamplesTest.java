@@ -287,7 +287,10 @@ class WorkedExamplesTest {
     VolumeIntegral integral =
         new VolumeIntegrator(TestFields.noInputs(), 10)
             .integrate(
-                VolumeIntegratorTest.boundary(surface), field.divergence(), OptionalDouble.empty());
+                VolumeIntegratorTest.boundary(surface),
+                field.divergence(),
+                OptionalDouble.empty(),
+                0);
     assertEquals(exact, integral.value().orElseThrow(), integral.errorBound() + rounding, source);
     assertTrue(
         integral.errorBound() <= 2e-10 * (integral.magnitude() + magnitude),
