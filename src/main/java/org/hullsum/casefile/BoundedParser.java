@@ -103,12 +103,13 @@ final class BoundedParser implements Parser {
 
   /** A text that begins with an ampersand reads as an anchor, and its beginning is gone. */
   private void refuseUnused() {
-    for (Map.Entry<String, NodeEvent> anchor : unusedAnchors.entrySet()) {
+    Optional<Map.Entry<String, NodeEvent>> anchor = unusedAnchors.entrySet().stream().findFirst();
+    if (anchor.isPresent()) {
       throw new Refusal(
           ProblemKind.SYNTAX,
-          anchor.getValue().getStartMark(),
+          anchor.get().getValue().getStartMark(),
           "a text that begins with `&` is an anchor to YAML, and nothing refers to `&"
-              + anchor.getKey()
+              + anchor.get().getKey()
               + "`: quote the text, as in \"&…\", or leave the anchor out");
     }
   }

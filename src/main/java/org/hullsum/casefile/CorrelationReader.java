@@ -25,6 +25,7 @@ final class CorrelationReader {
   /** The input behind the first metered figure of each patch. */
   private final Map<String, String> meters = new LinkedHashMap<>();
 
+  private final Set<String> refused = new HashSet<>();
   private final List<Statement> statements = new ArrayList<>();
 
   CorrelationReader(FormulaReader formulas) {
@@ -33,6 +34,11 @@ final class CorrelationReader {
 
   void meters(String patch, String input) {
     meters.putIfAbsent(patch, input);
+  }
+
+  /** A metered figure that was refused: nothing more is said of its correlations. */
+  void refused(String patch) {
+    refused.add(patch);
   }
 
   void state(String patch, YamlValue value) {
@@ -61,46 +67,52 @@ final class CorrelationReader {
     List<Correlation> correlations = new ArrayList<>();
     Set<Set<String>> seen = new HashSet<>();
     for (Statement statement : statements) {
-      String other = statement.other().text();
-      if (!patches.contains(other)) {
-        refuse(
-            statement.other(),
-            ProblemKind.UNKNOWN_NAME,
-            "there is no patch " + statement.other().shown() + Nearest.hint(other, patches));
-      } else if (other.equals(statement.patch())) {
-        refuse(
-            statement.other(),
-            ProblemKind.WRONG_VALUE,
-            "a figure is not correlated with itself; name another patch");
-      } else if (!meters.containsKey(other) || !meters.containsKey(statement.patch())) {
-        refuse(
-            statement.other(),
-            ProblemKind.WRONG_VALUE,
-            "a correlation is between two metered figures; `"
-                + (meters.containsKey(other) ? statement.patch() : other)
-                + "` has none");
-      } else if (!seen.add(Set.of(other, statement.patch()))) {
-        refuse(
-            statement.other(),
-            ProblemKind.WRONG_VALUE,
-            "the correlation of `"
-                + statement.patch()
-                + "` and `"
-                + other
-                + "` is stated already; state it once");
-      } else if (meters.get(other).equals(meters.get(statement.patch()))) {
-        refuse(
-            statement.other(),
-            ProblemKind.WRONG_VALUE,
-            "both patches are metered by the same parameter, which is wholly correlated");
-      } else {
-        correlations.add(
-            new Correlation(
-                meters.get(statement.patch()), meters.get(other), statement.coefficient()));
+      if (!refused.contains(statement.other().text()) && !refused.contains(statement.patch())) {
+        resolve(statement, patches, seen).ifPresent(correlations::add);
       }
     }
     refuseImpossible(correlations);
     return correlations;
+  }
+
+  private Optional<Correlation> resolve(
+      Statement statement, Set<String> patches, Set<Set<String>> seen) {
+    String patch = statement.patch();
+    String other = statement.other().text();
+    Optional<String> fault = Optional.empty();
+    if (!patches.contains(other)) {
+      refuse(
+          statement.other(),
+          ProblemKind.UNKNOWN_NAME,
+          "there is no patch " + statement.other().shown() + Nearest.hint(other, patches));
+      return Optional.empty();
+    }
+    if (other.equals(patch)) {
+      fault = Optional.of("a figure is not correlated with itself; name another patch");
+    } else if (!meters.containsKey(other) || !meters.containsKey(patch)) {
+      fault =
+          Optional.of(
+              "a correlation is between two metered figures; `"
+                  + (meters.containsKey(other) ? patch : other)
+                  + "` has none");
+    } else if (!seen.add(Set.of(other, patch))) {
+      fault =
+          Optional.of(
+              "the correlation of `"
+                  + patch
+                  + "` and `"
+                  + other
+                  + "` is stated already; once is"
+                  + " enough");
+    } else if (meters.get(other).equals(meters.get(patch))) {
+      fault = Optional.of("both patches are metered by one parameter, which is wholly correlated");
+    }
+    if (fault.isPresent()) {
+      refuse(statement.other(), ProblemKind.WRONG_VALUE, fault.get());
+      return Optional.empty();
+    }
+    return Optional.of(
+        new Correlation(meters.get(patch), meters.get(other), statement.coefficient()));
   }
 
   private void refuse(YamlValue value, ProblemKind kind, String message) {

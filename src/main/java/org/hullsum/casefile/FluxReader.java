@@ -199,11 +199,15 @@ final class FluxReader {
       YamlValue value, MapReader map, String patch, Optional<Dimension> rate) {
     if (value.asMap().isPresent()) {
       values.section(value, Section.METERED);
+      correlations.refused(patch);
       return Optional.empty();
     }
     boolean fixed = map.get("fixed").flatMap(v -> values.flag(v, "`fixed`")).orElse(false);
     Need need = new Need("`metered`", Map.of(), rate, Optional.empty());
     Optional<Formula> figure = measured.measured(value, patch + " metered", need);
+    if (figure.isEmpty()) {
+      correlations.refused(patch);
+    }
     if (figure.isPresent() && Figures.isBareName(figure.get().expression())) {
       String input = Figures.name(figure.get().expression());
       noteExact(patch, value, input, fixed);

@@ -37,14 +37,15 @@ final class FormulaReader {
   /** A formula of parameters and the variables of its place, in working units. */
   Optional<Formula> formula(YamlValue value, Need need) {
     Optional<YamlText> text = values.text(value, need.what());
-    return text.flatMap(t -> parse(t, need)).flatMap(p -> check(text.get(), p, need));
+    return text.flatMap(t -> parse(t, need)).flatMap(p -> checked(text.get(), p, need));
   }
 
   Optional<Expression> expression(YamlValue value, Need need) {
     return formula(value, need).map(Formula::expression);
   }
 
-  private Optional<ParsedExpression> parse(YamlText text, Need need) {
+  /** The formula of a text, its dimensions not yet looked at. */
+  Optional<ParsedExpression> parse(YamlText text, Need need) {
     if (scope.problems().full()) {
       return Optional.empty();
     }
@@ -64,7 +65,8 @@ final class FormulaReader {
     }
   }
 
-  private Optional<Formula> check(YamlText text, ParsedExpression parsed, Need need) {
+  /** A formula with its dimension, which must be the one that is needed. */
+  Optional<Formula> checked(YamlText text, ParsedExpression parsed, Need need) {
     if (scope.working().none()) {
       return Optional.of(new Formula(parsed.root(), Optional.empty()));
     }

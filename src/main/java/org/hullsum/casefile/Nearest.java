@@ -23,7 +23,7 @@ final class Nearest {
     int best = Math.max(1, (name.length() + 1) / 3) + 1;
     String found = null;
     for (String candidate : known) {
-      if (candidate.length() <= LONGEST) {
+      if (Math.abs(candidate.length() - name.length()) < best) {
         int distance = distance(wanted, candidate.toLowerCase(Locale.ROOT));
         if (distance < best) {
           best = distance;

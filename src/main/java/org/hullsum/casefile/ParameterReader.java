@@ -8,12 +8,11 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import org.hullsum.expression.Expression;
-import org.hullsum.expression.ExpressionParser;
+import org.hullsum.expression.ParsedExpression;
 import org.hullsum.expression.Symbols;
 import org.hullsum.model.Input;
 import org.hullsum.problem.Place;
 import org.hullsum.problem.ProblemKind;
-import org.hullsum.problem.TextFault;
 import org.hullsum.units.Dimension;
 import org.hullsum.units.MeasuredQuantity;
 
@@ -28,6 +27,7 @@ final class ParameterReader {
   private final CaseScope scope;
   private final ProblemAccumulator problems;
   private final Map<String, YamlText> stated = new LinkedHashMap<>();
+  private final Map<String, ParsedExpression> parsed = new LinkedHashMap<>();
   private final Map<String, Place> places = new LinkedHashMap<>();
 
   ParameterReader(FormulaReader formulas, MeasuredReader measured) {
@@ -47,6 +47,7 @@ final class ParameterReader {
         .flatMap(v -> formulas.values().map(v, "`parameters`", "from names to values"))
         .ifPresent(map -> map.entries().forEach(this::declare));
     override(overrides);
+    parseAll();
     for (String name : inOrder()) {
       define(name);
     }
@@ -117,23 +118,28 @@ final class ParameterReader {
     return ready;
   }
 
-  /** The stated parameters that a parameter's formula refers to; faults are told later. */
+  /** The stated parameters that a parameter's formula refers to. */
   private Set<String> needs(String name) {
-    String text = stated.get(name).text();
-    if (MeasuredReader.hasUncertainty(text)) {
-      return new LinkedHashSet<>();
+    Set<String> symbols =
+        new LinkedHashSet<>(
+            Optional.ofNullable(parsed.get(name)).map(p -> Symbols.in(p.root())).orElse(Set.of()));
+    symbols.retainAll(stated.keySet());
+    return symbols;
+  }
+
+  private void parseAll() {
+    for (Map.Entry<String, YamlText> entry : List.copyOf(stated.entrySet())) {
+      if (MeasuredReader.hasUncertainty(entry.getValue().text())) {
+        continue;
+      }
+      formulas
+          .parse(entry.getValue(), need(entry.getKey()))
+          .ifPresentOrElse(p -> parsed.put(entry.getKey(), p), () -> stated.remove(entry.getKey()));
     }
-    try {
-      Set<String> symbols =
-          new LinkedHashSet<>(
-              Symbols.in(
-                  ExpressionParser.parse(text, scope.dimensions().keySet(), scope.working())
-                      .root()));
-      symbols.retainAll(stated.keySet());
-      return symbols;
-    } catch (TextFault toldByDefine) {
-      return new LinkedHashSet<>();
-    }
+  }
+
+  private static Need need(String name) {
+    return Need.any("the parameter `" + name + "`");
   }
 
   /** One problem for each loop: walking from any parameter left over must come to one. */

@@ -16,7 +16,7 @@ final class ProblemAccumulator {
   static final int MOST_TOLD = 50;
 
   /** After so many, what is left of the file is not looked at any more. */
-  private static final int MOST_SOUGHT = 500;
+  private static final int MOST_SOUGHT = 200;
 
   private static final Comparator<Problem> BY_PLACE =
       Comparator.<Problem>comparingInt(p -> p.place().line())

@@ -39,6 +39,9 @@ final class YamlReader {
   private final SourceText source;
   private final ProblemAccumulator problems;
 
+  /** Whether a value holds itself, so that there is no tree to look at. */
+  private boolean endless;
+
   private YamlReader(SourceText source, ProblemAccumulator problems) {
     this.source = source;
     this.problems = problems;
@@ -79,7 +82,7 @@ final class YamlReader {
 
   private Optional<YamlMap> root(Node node) {
     Optional<YamlValue> value = convert(node, false);
-    if (value.isEmpty()) {
+    if (value.isEmpty() || endless) {
       return Optional.empty();
     }
     if (sizes.getOrDefault(value.get(), 1L) > MOST_VALUES) {
@@ -107,6 +110,7 @@ final class YamlReader {
       return Optional.of(known);
     }
     if (node.isRecursive()) {
+      endless = true;
       problems.add(
           ProblemKind.WRONG_VALUE,
           place(node.getStartMark()),

@@ -20,6 +20,9 @@ final class NameSuggestion {
     String best = null;
     int least = allowed + 1;
     for (String candidate : known) {
+      if (Math.abs(candidate.length() - name.length()) > allowed) {
+        continue;
+      }
       int distance =
           candidate.equalsIgnoreCase(name)
               ? 0

@@ -7,7 +7,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
-import java.util.TreeSet;
 import org.hullsum.expression.Expression.Constant;
 import org.hullsum.problem.ProblemKind;
 import org.hullsum.problem.TextFault;
@@ -42,10 +41,11 @@ final class NameTable {
           Map.entry("inf", "infinite numbers are not used"),
           Map.entry("nan", "a formula has a value everywhere it is used"));
 
+  /** Looked up, never copied: one case has many formulas and may have many parameters. */
   private final Set<String> symbols;
 
   NameTable(Collection<String> symbols) {
-    this.symbols = new TreeSet<>(symbols);
+    this.symbols = symbols instanceof Set<String> set ? set : Set.copyOf(symbols);
   }
 
   boolean knows(String name) {
@@ -101,7 +101,7 @@ final class NameTable {
       return "only numbers, pi and e may stand here";
     }
     return "known here: "
-        + String.join(", ", symbols.stream().limit(MOST_LISTED).toList())
+        + String.join(", ", symbols.stream().sorted().limit(MOST_LISTED).toList())
         + (symbols.size() > MOST_LISTED ? ", …" : "");
   }
 }
