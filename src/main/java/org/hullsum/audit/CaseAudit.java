@@ -99,7 +99,7 @@ final class CaseAudit {
           boolean identity = FieldUse.isIdentity(surface.volume(), audited.patches());
           List<FieldUse.Carrier> carriers =
               identity ? List.of() : FieldUse.common(surface.volume(), audited.patches());
-          return integration.integrate(surface, carriers, surface.noRegion());
+          return InstantRounding.of(integration.integrate(surface, carriers, surface.noRegion()));
         });
   }
 
@@ -110,7 +110,7 @@ final class CaseAudit {
       rates.add(
           patches.stream().map(p -> p.rateAt(instant, scales.rate(), Optional.empty())).toList());
     }
-    return rates;
+    return InstantRounding.ofPatches(rates);
   }
 
   private Map<String, GapIntegration.GapAudit> integrateGaps(List<SurfaceAudit> surfaces) {

@@ -37,6 +37,10 @@ record Estimate(double value, double error, Map<String, Double> sensitivities) {
     return new Estimate(factor * value, Math.abs(factor) * error, scaled);
   }
 
+  Estimate widened(double more) {
+    return new Estimate(value, error + more, sensitivities);
+  }
+
   Estimate plus(Estimate other) {
     return sum(List.of(this, other));
   }

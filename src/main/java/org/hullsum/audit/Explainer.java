@@ -20,7 +20,7 @@ import org.hullsum.model.Volume;
  * class 1 rest on evidence of their own and are not counted.
  */
 final class Explainer {
-  /** Class 2 hypotheses that explain less are not worth reading. */
+  /** Hypotheses that explain less are not worth reading, but for what is seen to be wrong. */
   private static final double WORTH_SAYING = 0.5;
 
   /** So many explanations of one balance at most. */
@@ -145,8 +145,8 @@ final class Explainer {
     double w = balance.halfWidth();
     List<Hypothesis> kept =
         hypotheses.stream()
-            .sorted(Hypothesis.ranking(w))
-            .filter(h -> h.rank() == Hypothesis.SHOWN || explained(now, h, w) >= WORTH_SAYING)
+            .sorted(Hypothesis.ranking(now.orElse(0.0), w))
+            .filter(h -> isEvident(h) || explained(now, h, w) >= WORTH_SAYING)
             .limit(MOST)
             .toList();
     int first = explanations.size();
@@ -172,6 +172,10 @@ final class Explainer {
               tied,
               h.message()));
     }
+  }
+
+  private static boolean isEvident(Hypothesis h) {
+    return h.rank() == Hypothesis.SHOWN && h.kind() != Explanation.Kind.FIELD_MAKES_SOURCE;
   }
 
   /** Without a residual a hypothesis explains all or nothing. */

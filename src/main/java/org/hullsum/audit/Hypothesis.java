@@ -41,13 +41,22 @@ record Hypothesis(
   }
 
   /**
-   * By class; inside it first those that fit, in the order of the kinds, then by what is left of
-   * the residual. Equal ones stay in the order of the case.
+   * By class; inside it first those that fit, in the order of the kinds; then patches shown to face
+   * the wrong way, all together before one, where turning them matters; then by what is left of the
+   * residual. Equal ones stay in the order of the case.
+   *
+   * @param now the residual as it stands
+   * @param halfWidth w of the balance
    */
-  static Comparator<Hypothesis> ranking(double halfWidth) {
+  static Comparator<Hypothesis> ranking(double now, double halfWidth) {
     return Comparator.comparingInt(Hypothesis::rank)
         .thenComparing(h -> !h.fits(halfWidth))
         .thenComparingInt(h -> h.fits(halfWidth) ? h.kind.ordinal() : 0)
+        .thenComparingInt(h -> h.isShownReversal(now, halfWidth) ? -h.on.size() : 0)
         .thenComparingDouble(h -> Math.abs(h.then));
+  }
+
+  private boolean isShownReversal(double now, double halfWidth) {
+    return kind == Explanation.Kind.REVERSED && rank == SHOWN && Math.abs(then - now) > halfWidth;
   }
 }

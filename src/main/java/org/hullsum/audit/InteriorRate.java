@@ -37,6 +37,19 @@ record InteriorRate(
     }
   }
 
+  /** The same with a larger error bound. */
+  InteriorRate widened(double error) {
+    return new InteriorRate(
+        volume,
+        kind,
+        value.map(v -> v.widened(error)),
+        magnitude,
+        accurate,
+        route,
+        formula,
+        missing);
+  }
+
   /** The sum over the volumes of an envelope, each with a value. */
   static InteriorRate sum(String envelope, List<InteriorRate> rates) {
     InteriorRate first = rates.get(0);

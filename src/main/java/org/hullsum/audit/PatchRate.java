@@ -45,6 +45,20 @@ record PatchRate(
     return total.isEmpty() && missing.isEmpty();
   }
 
+  /** The same with a larger error bound. */
+  PatchRate widened(double error) {
+    return new PatchRate(
+        patch,
+        leaves,
+        enters,
+        total.map(t -> t.widened(error)),
+        following,
+        integrated,
+        magnitude,
+        accurate,
+        missing);
+  }
+
   /** The mean of one patch's rates at the instants of an interval. */
   static PatchRate mean(List<PatchRate> rates, TimeMean mean) {
     PatchRate first = rates.get(0);
