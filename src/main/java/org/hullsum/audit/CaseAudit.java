@@ -48,13 +48,17 @@ final class CaseAudit {
     List<PatchAudit> patches = integratePatches();
     List<SurfaceAudit> surfaces = inspectSurfaces(patches, finder);
     FacingAudit facings = new FacingAudit(patches, surfaces);
-    List<InteriorAudit> interiors = integrateInteriors(surfaces);
-    List<List<PatchRate>> rates = rates(patches);
+    List<SingularityAudit> onPatches = inspectPatches(patches);
+    List<SingularityAudit> inVolumes = inspectVolumes(surfaces);
+    List<InteriorAudit> interiors = integrateInteriors(surfaces, inVolumes);
+    List<List<PatchRate>> rates = rates(patches, onPatches);
     BalanceSheet sheet = new BalanceSheet(audited, scales, rates, interiors);
     List<BalanceSheet.Drawn> drawn =
         Subjects.of(audited, surfaces, scales).stream().map(sheet::draw).toList();
     Map<String, GapIntegration.GapAudit> gaps = integrateGaps(surfaces);
     CaseFindings findings = new CaseFindings(scales);
+    onPatches.forEach(found -> findings.addAll(found.findings(scales)));
+    inVolumes.forEach(found -> findings.addAll(found.findings(scales)));
     gather(findings, patches, surfaces, facings, interiors, rates, drawn);
     Explainer.Explanations explained = explain(patches, surfaces, facings, interiors, drawn, gaps);
     List<BalanceResult> balances =
@@ -88,7 +92,31 @@ final class CaseAudit {
     return workers.map("surfaces", volumes.size(), i -> inspection.inspect(volumes.get(i)));
   }
 
-  private List<InteriorAudit> integrateInteriors(List<SurfaceAudit> surfaces) {
+  private List<SingularityAudit> inspectPatches(List<PatchAudit> patches) {
+    SingularityInspection inspection = new SingularityInspection(inputs.values(), instants);
+    return workers.map("fields", patches.size(), i -> inspection.inspect(patches.get(i)));
+  }
+
+  private List<SingularityAudit> inspectVolumes(List<SurfaceAudit> surfaces) {
+    SingularityInspection inspection = new SingularityInspection(inputs.values(), instants);
+    return workers.map(
+        "insides",
+        surfaces.size(),
+        i -> {
+          SurfaceAudit surface = surfaces.get(i);
+          Volume volume = surface.volume();
+          return surface.noRegion().isPresent()
+              ? new SingularityAudit(volume.name(), volume.place(), Map.of(), Map.of())
+              : inspection.inspect(
+                  surface,
+                  FieldUse.common(volume, audited.patches()).stream()
+                      .map(FieldUse.Carrier::field)
+                      .toList());
+        });
+  }
+
+  private List<InteriorAudit> integrateInteriors(
+      List<SurfaceAudit> surfaces, List<SingularityAudit> inVolumes) {
     InteriorIntegration integration =
         new InteriorIntegration(inputs, instants, options.digits(), scales);
     return workers.map(
@@ -99,16 +127,19 @@ final class CaseAudit {
           boolean identity = FieldUse.isIdentity(surface.volume(), audited.patches());
           List<FieldUse.Carrier> carriers =
               identity ? List.of() : FieldUse.common(surface.volume(), audited.patches());
-          return InstantRounding.of(integration.integrate(surface, carriers, surface.noRegion()));
+          Optional<String> unfit = surface.noRegion().or(() -> inVolumes.get(i).singular(scales));
+          return InstantRounding.of(integration.integrate(surface, carriers, unfit));
         });
   }
 
-  private List<List<PatchRate>> rates(List<PatchAudit> patches) {
+  private List<List<PatchRate>> rates(List<PatchAudit> patches, List<SingularityAudit> onPatches) {
     List<List<PatchRate>> rates = new ArrayList<>();
     for (int i = 0; i < instants.size(); i++) {
-      int instant = i;
-      rates.add(
-          patches.stream().map(p -> p.rateAt(instant, scales.rate(), Optional.empty())).toList());
+      List<PatchRate> now = new ArrayList<>();
+      for (int p = 0; p < patches.size(); p++) {
+        now.add(patches.get(p).rateAt(i, scales.rate(), onPatches.get(p).singular(scales)));
+      }
+      rates.add(now);
     }
     return InstantRounding.ofPatches(rates);
   }

@@ -168,9 +168,7 @@ record SurfaceAudit(
     if (open) {
       return "∬ n dS and ∬ r⊗n dS do not have the values that every closed surface has";
     }
-    return "closedness not proved: "
-        + undeterminedReason()
-            .orElse(
-                "∬ n dS and ∬ r⊗n dS are those of a closed surface, as some open ones have too");
+    return undeterminedReason()
+        .orElse("∬ n dS and ∬ r⊗n dS are those of a closed surface, as some open ones have too");
   }
 }
