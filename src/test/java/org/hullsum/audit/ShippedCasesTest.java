@@ -29,7 +29,6 @@ class ShippedCasesTest {
     "conduction-block, CONSERVATION",
     "dished-vessel, IDENTITY",
     "elbow, CONSERVATION",
-    "branch-on-shell, IDENTITY",
     "dosing-annulus, IDENTITY",
     "basin-and-sump, CONSERVATION",
     "brine-tank-metered, CONSERVATION",
@@ -115,8 +114,15 @@ class ShippedCasesTest {
   @ParameterizedTest
   @ValueSource(
       strings = {
-        "stirred-tank", "conduction-block", "dished-vessel", "elbow", "basin-and-sump",
-        "all-flux-boundary", "mass-from-nothing", "duct-claim", "dosing-annulus", "branch-on-shell"
+        "stirred-tank",
+        "conduction-block",
+        "dished-vessel",
+        "elbow",
+        "basin-and-sump",
+        "all-flux-boundary",
+        "mass-from-nothing",
+        "duct-claim",
+        "dosing-annulus"
       })
   void turningAnyOnePatchIsFoundWhateverItsFlux(String name) {
     Case sound = shipped(name);
