@@ -25,6 +25,9 @@ interface Cell {
    */
   boolean sample(int nx, double[] x, int ny, double[] y, double[][] values);
 
+  /** Error of the cell's own boundary, by rounding, as part of its magnitude. */
+  double rounding();
+
   /** A place of the parameter domain whose neighbourhood needs a closer look. */
   ParameterPoint surprise();
 

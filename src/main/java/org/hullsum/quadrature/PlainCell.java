@@ -42,6 +42,11 @@ final class PlainCell implements Cell {
   }
 
   @Override
+  public double rounding() {
+    return 0;
+  }
+
+  @Override
   public ParameterPoint surprise() {
     return watch.place();
   }

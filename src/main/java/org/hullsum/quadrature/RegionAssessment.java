@@ -51,7 +51,8 @@ final class RegionAssessment {
       region.middleY[c] = sample.middleY[c];
       double open =
           Decay.error(ruleX, sample.topX[c], newRatioX(c, ruleX), sample.magnitude[c])
-              + Decay.error(ruleY, sample.topY[c], newRatioY(c, ruleY), sample.magnitude[c]);
+              + Decay.error(ruleY, sample.topY[c], newRatioY(c, ruleY), sample.magnitude[c])
+              + region.cell.rounding() * sample.magnitude[c];
       if (checked) {
         region.error[c] = Math.max(open, DIFFERENCE_SAFETY * reduction * difference);
       } else {

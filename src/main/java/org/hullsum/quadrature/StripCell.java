@@ -8,6 +8,9 @@ package org.hullsum.quadrature;
  * back at an end of the interval it behaves like a square root there, which {@link EndMap} removes.
  */
 final class StripCell implements Cell {
+  /** Error of a root: its own rounding and that of the switch function near it. */
+  private static final double ROOT_ERROR = 16 * Math.ulp(1.0);
+
   private final SquareProblem problem;
   private final RowRoots roots;
   private final GridBlocks blocks;
@@ -18,6 +21,7 @@ final class StripCell implements Cell {
   private final int strips;
   private final long signature;
   private final boolean wholeOuter;
+  private final double rounding;
   private double[] jacobian = new double[0];
   private double surprising;
 
@@ -46,6 +50,8 @@ final class StripCell implements Cell {
     signature = like.signature();
     blocks = new GridBlocks(problem.integrand());
     wholeOuter = from == 0 && to == 1;
+    double width = like.end(strip) - like.begin(strip);
+    rounding = strips == 1 ? 0 : Math.min(1, ROOT_ERROR / Math.max(width, Double.MIN_NORMAL));
   }
 
   @Override
@@ -98,6 +104,11 @@ final class StripCell implements Cell {
   private double outer(double x) {
     double part = map.position(x);
     return part < 0.5 ? from + (to - from) * part : to - (to - from) * (1 - part);
+  }
+
+  @Override
+  public double rounding() {
+    return rounding;
   }
 
   @Override

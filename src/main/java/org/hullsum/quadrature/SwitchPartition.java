@@ -19,6 +19,8 @@ final class SwitchPartition {
   /** The first and last row stand this far off the sides, where charts may shrink to a point. */
   private static final double SIDE = 0x1p-40;
 
+  private static final double MERGED = 0x1p-46;
+
   /** More cells than this are no structure but noise. */
   private static final int MOST_CELLS = 600;
 
@@ -55,7 +57,23 @@ final class SwitchPartition {
   Optional<List<Cell>> cells() {
     Signature signature = outer -> roots.at(outer).signature();
     long[] signatures = Arrays.stream(outers).mapToLong(signature::at).toArray();
-    return Breakpoints.between(signature, outers, signatures).flatMap(this::strips);
+    return Breakpoints.between(signature, outers, signatures)
+        .map(SwitchPartition::merged)
+        .flatMap(this::strips);
+  }
+
+  /**
+   * Where curves cross, rounding shuffles their roots over a few neighbouring numbers: changes so
+   * close together are one.
+   */
+  private static double[] merged(double[] critical) {
+    int kept = 0;
+    for (double one : critical) {
+      if (kept == 0 || one - critical[kept - 1] > MERGED) {
+        critical[kept++] = one;
+      }
+    }
+    return Arrays.copyOf(critical, kept);
   }
 
   private Optional<List<Cell>> strips(double[] critical) {
