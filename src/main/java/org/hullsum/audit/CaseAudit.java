@@ -187,6 +187,7 @@ final class CaseAudit {
     Map<String, Patch> byName = new LinkedHashMap<>();
     audited.patches().forEach(p -> byName.put(p.name(), p));
     drawn.forEach(d -> findings.addBalances(d, placeOf(d.subject().name()), byName));
+    findings.addAll(NameUse.findings(audited));
   }
 
   /** The tolerances of the volume that a patch leaves, else of the one that it enters. */

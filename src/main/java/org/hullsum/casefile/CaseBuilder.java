@@ -99,7 +99,8 @@ final class CaseBuilder {
             fields.places(),
             problems.warnings(),
             scope.notes(),
-            List.of(new Case.SourceFile(options.name(), content.sha256()))));
+            List.of(new Case.SourceFile(options.name(), content.sha256())),
+            scope.usedNames()));
   }
 
   private void checkFormat(MapReader top) {

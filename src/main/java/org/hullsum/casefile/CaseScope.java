@@ -31,6 +31,7 @@ final class CaseScope {
   private final Map<String, Input> inputs = new LinkedHashMap<>();
   private final Map<String, Double> values = new LinkedHashMap<>();
   private final Set<String> notes = new LinkedHashSet<>();
+  private final Set<String> used = new LinkedHashSet<>();
   private Optional<Place> firstUseOfTime = Optional.empty();
 
   CaseScope(
@@ -119,6 +120,15 @@ final class CaseScope {
 
   List<String> notes() {
     return List.copyOf(notes);
+  }
+
+  /** Something in the file refers to a parameter or a field. */
+  void uses(String name) {
+    used.add(name);
+  }
+
+  Set<String> usedNames() {
+    return Collections.unmodifiableSet(used);
   }
 
   void usesTime(Place place) {

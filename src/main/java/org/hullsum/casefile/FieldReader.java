@@ -91,6 +91,7 @@ final class FieldReader {
               + YamlTraps.hint(name.get()));
       return Optional.empty();
     }
+    formulas.scope().uses(name.get().text());
     if (open.size() >= MOST_LAYERS) {
       problems.add(
           ProblemKind.LIMIT_EXCEEDED,

@@ -53,6 +53,7 @@ final class FormulaReader {
       ParsedExpression parsed =
           ExpressionParser.parse(text.text(), symbols(need).keySet(), scope.working());
       parsed.notes().forEach(scope::note);
+      Symbols.in(parsed.root()).forEach(scope::uses);
       if (need.variables().containsKey("t") && Symbols.in(parsed.root()).contains("t")) {
         scope.usesTime(text.place());
       }

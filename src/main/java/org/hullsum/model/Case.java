@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Objects;
 import java.util.Optional;
+import java.util.Set;
 import org.hullsum.field.VectorField;
 import org.hullsum.problem.Place;
 import org.hullsum.problem.Problem;
@@ -30,6 +31,8 @@ import org.hullsum.units.WorkingUnits;
  * @param warnings what was accepted but is probably not what was meant
  * @param notes sentences that the report owes the reader, such as which gallon a unit was taken for
  * @param sources every file read, with its SHA-256
+ * @param usedNames the parameters and fields that something in the file refers to, whether or not
+ *     it left a trace in a formula
  */
 public record Case(
     String file,
@@ -47,7 +50,8 @@ public record Case(
     Map<String, Place> fieldPlaces,
     List<Problem> warnings,
     List<String> notes,
-    List<SourceFile> sources) {
+    List<SourceFile> sources,
+    Set<String> usedNames) {
   /**
    * A file that was read.
    *
@@ -78,5 +82,6 @@ public record Case(
     warnings = List.copyOf(warnings);
     notes = List.copyOf(notes);
     sources = List.copyOf(sources);
+    usedNames = Set.copyOf(usedNames);
   }
 }

@@ -88,7 +88,8 @@ final class Audits {
         a.fieldPlaces(),
         a.warnings(),
         a.notes(),
-        a.sources());
+        a.sources(),
+        a.usedNames());
   }
 
   /** The case with one patch turned. */
