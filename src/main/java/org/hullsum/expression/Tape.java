@@ -43,6 +43,23 @@ record Tape(List<Instruction> instructions, List<Integer> outputs, List<Expressi
     boolean uses(int k) {
       return k < operation.arity();
     }
+
+    /** Written out, like {@link #hashCode}: linking the generated ones costs every start dearly. */
+    @Override
+    public boolean equals(Object other) {
+      return other instanceof Instruction that
+          && operation == that.operation
+          && a == that.a
+          && b == that.b
+          && c == that.c
+          && Double.doubleToLongBits(value) == Double.doubleToLongBits(that.value);
+    }
+
+    @Override
+    public int hashCode() {
+      int operands = 31 * (31 * (31 * operation.ordinal() + a) + b) + c;
+      return 31 * operands + Double.hashCode(value);
+    }
   }
 
   /** Sum of the costs of all instructions, one being a multiplication. */

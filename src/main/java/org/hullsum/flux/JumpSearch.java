@@ -17,6 +17,7 @@ import org.hullsum.expression.Expression.Call;
 import org.hullsum.expression.Function;
 import org.hullsum.expression.Printer;
 import org.hullsum.expression.Switches;
+import org.hullsum.expression.Symbols;
 import org.hullsum.field.VectorField;
 import org.hullsum.numeric.Box3;
 import org.hullsum.numeric.Vector3;
@@ -93,13 +94,36 @@ public final class JumpSearch {
 
   private static List<Expression> candidates(VectorField field) {
     List<Expression> candidates = new ArrayList<>();
+    boolean dependsOnAngle = dependsOnAngle(field);
     for (Expression component :
         List.of(field.cartesian().x(), field.cartesian().y(), field.cartesian().z())) {
       List<Expression> found = new ArrayList<>(Switches.jumps(component));
-      found.addAll(cuts(component));
+      if (dependsOnAngle) {
+        found.addAll(cuts(component));
+      }
       found.stream().filter(f -> !candidates.contains(f)).forEach(candidates::add);
     }
     return candidates;
+  }
+
+  /**
+   * Whether an angle by atan2 is in the field as it was stated; the local unit vectors turn with
+   * the angle, but without a jump.
+   */
+  private static boolean dependsOnAngle(VectorField field) {
+    for (Expression component :
+        List.of(field.components().x(), field.components().y(), field.components().z())) {
+      if (!cuts(component).isEmpty()) {
+        return true;
+      }
+      for (String symbol : Symbols.in(component)) {
+        Expression definition = field.coordinates().definitions().get(symbol);
+        if (definition != null && !cuts(definition).isEmpty()) {
+          return true;
+        }
+      }
+    }
+    return false;
   }
 
   /** The first arguments of atan2: where one vanishes and the second is negative is the cut. */
