@@ -8,7 +8,7 @@ import org.hullsum.expression.Function;
 /** Which names a case may give to its parameters and to its volumes, patches and fields. */
 final class NameRules {
   /** The variables of the format: names that mean a place, an instant or a surface coordinate. */
-  static final Set<String> COORDINATES =
+  private static final Set<String> COORDINATES =
       Set.of("x", "y", "z", "t", "r", "s", "u", "v", "theta", "polar", "azimuth");
 
   private static final Set<String> WORDS = Set.of("pi", "e", "if", "and", "or", "not");

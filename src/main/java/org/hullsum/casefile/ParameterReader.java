@@ -62,9 +62,7 @@ final class ParameterReader {
           entry.key().place(),
           "a parameter can't be called " + entry.key().shown() + ": " + fault.get());
     }
-    if (!NameRules.COORDINATES.contains(name)) {
-      scope.declare(name);
-    }
+    scope.declare(name);
     formulas
         .values()
         .text(entry.value(), "the parameter `" + name + "`")

@@ -57,7 +57,7 @@ final class CaseTexts {
     if (!hasKey(parts, "format")) {
       text.append("format: hullsum-case/1\n");
     }
-    if (!hasKey(parts, "quantity") && !hasKey(parts, "units")) {
+    if (!hasKey(parts, "quantity") && !parts.contains("units: none")) {
       text.append("quantity: volume\n");
     }
     if (!hasKey(parts, "patches")) {

@@ -14,11 +14,10 @@ import org.junit.jupiter.params.provider.MethodSource;
 /** One good case, and siblings broken in one named way each. */
 class OneFaultTest {
   /** Marks in a replacement where the problem must be told. */
-  private static final String MARK = "¤";
+  static final String MARK = "¤";
 
   /** A way to break the good case: a text in it and what stands in its place. */
-  private record Fault(
-      String name, String found, String replacement, ProblemKind kind, String said) {
+  record Fault(String name, String found, String replacement, ProblemKind kind, String said) {
     @Override
     public String toString() {
       return name;
