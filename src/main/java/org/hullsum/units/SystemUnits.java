@@ -72,8 +72,8 @@ final class SystemUnits {
     metric(atoms, "T", 1, 0, MAGNETIC_FLUX.dividedBy(AREA));
     metric(atoms, "H", 1, 0, MAGNETIC_FLUX.dividedBy(Dimension.CURRENT));
     metric(atoms, "G", 1, -4, MAGNETIC_FLUX.dividedBy(AREA));
-    metric(atoms, "eV", 1.602176634, -19, ENERGY);
-    metric(atoms, "[e]", 1.602176634, -19, CHARGE);
+    metric(atoms, "eV", 1_602_176_634, -28, ENERGY);
+    metric(atoms, "[e]", 1_602_176_634, -28, CHARGE);
   }
 
   private static void addTimes(Map<String, UnitAtom> atoms) {
@@ -111,7 +111,7 @@ final class SystemUnits {
     metric(atoms, "Gy", 1, 0, DOSE);
     metric(atoms, "Sv", 1, 0, DOSE);
     metric(atoms, "kat", 1, 0, Dimension.AMOUNT.times(FREQUENCY));
-    metric(atoms, "u", 1.66053906660, -27, Dimension.MASS);
+    metric(atoms, "u", 166_053_906_660.0, -38, Dimension.MASS);
     plain(atoms, "Ao", UnitTerm.of(1, -10, Dimension.LENGTH));
     plain(atoms, "b", UnitTerm.of(1, -28, AREA));
     plain(atoms, "atm", UnitTerm.of(101_325, 0, PRESSURE));
