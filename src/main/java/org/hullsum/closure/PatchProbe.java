@@ -9,6 +9,8 @@ import org.hullsum.geometry.Crossing;
 import org.hullsum.geometry.Crossings;
 import org.hullsum.geometry.LineCrossings;
 import org.hullsum.geometry.Surface;
+import org.hullsum.geometry.SurfaceSample;
+import org.hullsum.geometry.SurfaceSamples;
 import org.hullsum.numeric.Vector3;
 
 /**
@@ -33,9 +35,14 @@ final class PatchProbe {
   private final LineCrossings.Workspace workspace;
   private final List<ChartEvaluator> charts;
   private final List<SamplePoint> points = new ArrayList<>();
+  private final Surface surface;
+  private final Map<String, Double> parameters;
   private int tried;
+  private boolean searched;
 
   PatchProbe(Surface surface, Map<String, Double> parameters) {
+    this.surface = surface;
+    this.parameters = parameters;
     this.crossings = LineCrossings.of(surface, parameters);
     this.workspace = crossings.workspace();
     this.charts =
@@ -58,6 +65,14 @@ final class PatchProbe {
   List<SamplePoint> points(int count) {
     while (points.size() < count && tried < TRIES * count) {
       tryPoint(tried++);
+    }
+    if (points.size() < count && !searched) {
+      searched = true;
+      // The trim leaves little of the charts: look for it with more care.
+      for (SurfaceSample sample : SurfaceSamples.of(surface, parameters, count)) {
+        Vector3 normal = sample.at().areaVector().unit();
+        points.add(new SamplePoint(sample.at().position(), normal));
+      }
     }
     return points.subList(0, Math.min(count, points.size()));
   }

@@ -1,6 +1,7 @@
 package org.hullsum.flux;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
@@ -30,6 +31,7 @@ final class ConeIntegrand implements SquareIntegrand {
   private final FormulaIntegrand surface;
   private final Optional<FormulaIntegrand> switches;
   private final double[][] frame = new double[6][BLOCK];
+  private final double[][] apexes = new double[3][BLOCK];
   private final double[] height = new double[BLOCK];
   private final boolean[] wanted = new boolean[BLOCK];
   private Vector3 apex = Vector3.ZERO;
@@ -63,6 +65,9 @@ final class ConeIntegrand implements SquareIntegrand {
   /** From now on integrates cones to that apex. */
   void aim(Vector3 newApex, RayIntegrals newRays, int densities) {
     apex = newApex;
+    for (int axis = 0; axis < 3; axis++) {
+      Arrays.fill(apexes[axis], apex.component(axis));
+    }
     rays = Optional.of(newRays);
     components = RayIntegrals.rows(densities);
   }
@@ -75,7 +80,7 @@ final class ConeIntegrand implements SquareIntegrand {
   @Override
   public void evaluate(int count, double[] u, double[] v, double[][] values) {
     look(count, u, v);
-    rays.orElseThrow().integrate(count, frame, wanted, values);
+    rays.orElseThrow().integrate(count, apexes, frame, wanted, values);
     int last = values.length - 1;
     for (int i = 0; i < count; i++) {
       for (int k = 0; k < last; k++) {

@@ -4,7 +4,6 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 import java.util.OptionalDouble;
 import org.apache.commons.numbers.core.Sum;
 import org.hullsum.expression.Expression;
@@ -21,6 +20,9 @@ import org.hullsum.quadrature.Integral;
  * outside the volume cancels. Not thread-safe.
  */
 final class ConeRoute {
+  /** The power of s in the inner integrals. */
+  private static final int POWER = 2;
+
   /** Points of the coarse look at each chart, in each direction. */
   private static final int LOOKS = 9;
 
@@ -41,22 +43,6 @@ final class ConeRoute {
   private final Map<String, Double> constants;
   private final OptionalDouble instant;
   private final double size;
-
-  /**
-   * What was found from one p.
-   *
-   * @param values by density
-   * @param errorBounds by density
-   * @param magnitude ∭|g| of the first density
-   * @param status of the first density
-   */
-  record Outcome(
-      List<Double> values,
-      List<Double> errorBounds,
-      double magnitude,
-      long evaluations,
-      Integral.Status status,
-      Optional<Vector3> nonFiniteAt) {}
 
   /**
    * @param densities the one wanted, then others that come along
@@ -87,18 +73,17 @@ final class ConeRoute {
    *     but rounding is not chased
    * @param limit largest number of points of each chart
    */
-  Outcome from(Vector3 apex, double relative, double enough, long limit) {
+  DensityOutcome from(Vector3 apex, double relative, double enough, long limit) {
     Densities evaluated = new Densities(densities, constants, instant, size, RayIntegrals.BLOCK);
     Coarse coarse = look(evaluated, apex);
     double magnitude = Math.max(coarse.magnitude, LEAST_SHARE * coarse.coneMagnitude);
-    Totals totals = pass(evaluated, apex, coarse, Math.max(relative * magnitude, enough), limit);
+    DensityTotals totals = pass(evaluated, apex, coarse, Math.max(relative * magnitude, enough), limit);
     if (totals.isFinite()
         && totals.errorBound(0) > Math.max(relative * totals.magnitude(), enough)) {
       // The coarse look took the region for larger than it is.
-      long spent = totals.evaluations;
-      totals =
-          pass(evaluated, apex, coarse, Math.max(relative * totals.magnitude(), enough), limit);
-      totals.evaluations += spent;
+      long spent = totals.evaluations();
+      double tighter = Math.max(relative * totals.magnitude(), enough);
+      totals = pass(evaluated, apex, coarse, tighter, limit).spent(spent);
     }
     double loose = Math.max(MAGNITUDE_ACCURACY * totals.magnitude(), enough);
     if (totals.isFinite() && totals.magnitudeError() > loose) {
@@ -108,53 +93,62 @@ final class ConeRoute {
   }
 
   /** All cones to one accuracy. */
-  private Totals pass(
+  private DensityTotals pass(
       Densities evaluated, Vector3 apex, Coarse coarse, double allowed, long limit) {
     double rounding = ROUNDING * coarse.coneMagnitude;
     double error = Math.max(Math.max(allowed, rounding), Double.MIN_NORMAL);
     double perRay = INNER_SHARE * error / Math.max(coarse.coneVolume, Double.MIN_NORMAL);
-    int level = RayIntegrals.level(evaluated, apex, coarse.ends, perRay);
-    RayIntegrals rays = new RayIntegrals(evaluated, apex, level, perRay);
+    double[][] starts = repeated(apex, coarse.ends[0].length);
+    int level = RayIntegrals.level(evaluated, POWER, starts, coarse.ends, perRay);
+    RayIntegrals rays = new RayIntegrals(evaluated, POWER, level, perRay);
     Accuracy accuracy =
         new Accuracy(0, error / (2 * cones.size()), ChartIntegral.ANY_MAGNITUDE, limit);
-    Totals totals = new Totals(densities.size());
+    DensityTotals totals = new DensityTotals(densities.size());
     for (ConeIntegrand cone : cones) {
       cone.aim(apex, rays, densities.size());
       Integral[] parts = cone.integrate(accuracy);
       totals.add(parts);
       if (parts[0].nonFiniteAt().isPresent()) {
-        totals.nonFiniteAt = Optional.of(cone.position(parts[0].nonFiniteAt().get()));
-        break;
+        return totals.notFinite(cone.position(parts[0].nonFiniteAt().get()));
       }
     }
     return totals;
   }
 
-  private void measureMagnitude(Totals totals, long limit) {
+  private void measureMagnitude(DensityTotals totals, long limit) {
     double error = MAGNITUDE_ACCURACY * Math.max(totals.magnitude(), Double.MIN_NORMAL);
     Accuracy accuracy = new Accuracy(0, error / cones.size(), ChartIntegral.ANY_MAGNITUDE, limit);
-    int row = densities.size();
-    totals.sums[row] = Sum.create();
+    Sum magnitude = Sum.create();
     for (ConeIntegrand cone : cones) {
       Integral part = cone.integrateMagnitude(accuracy);
-      totals.sums[row].add(part.value());
-      totals.evaluations += part.evaluations();
+      magnitude.add(part.value());
+      totals.spent(part.evaluations());
     }
+    totals.replaceMagnitude(magnitude.getAsDouble());
+  }
+
+  private static double[][] repeated(Vector3 point, int count) {
+    double[][] rows = new double[3][count];
+    for (int axis = 0; axis < 3; axis++) {
+      Arrays.fill(rows[axis], point.component(axis));
+    }
+    return rows;
   }
 
   private Coarse look(Densities evaluated, Vector3 apex) {
     RayIntegrals rays =
-        new RayIntegrals(evaluated, apex, RayIntegrals.COARSE, Double.POSITIVE_INFINITY);
+        new RayIntegrals(evaluated, POWER, RayIntegrals.COARSE, Double.POSITIVE_INFINITY);
     Coarse coarse = new Coarse();
     int each = LOOKS * LOOKS;
     coarse.ends = new double[3][each * cones.size()];
     double[][] results = new double[RayIntegrals.rows(densities.size())][each];
     boolean[] all = new boolean[each];
     Arrays.fill(all, true);
+    double[][] starts = repeated(apex, each);
     int first = 0;
     for (ConeIntegrand cone : cones) {
       double[][] rows = cone.lattice(apex, LOOKS);
-      rays.integrate(each, rows, all, results);
+      rays.integrate(each, starts, rows, all, results);
       double[] absolute = results[densities.size()];
       for (int i = 0; i < each; i++) {
         double height = rows[3][i];
@@ -185,62 +179,5 @@ final class ConeRoute {
 
     /** ∬|(r − p)·N|. */
     private double coneVolume;
-  }
-
-  /** The sums over all charts: per density, of |g|, and of the inner error. */
-  private static final class Totals {
-    private final int densities;
-    private final Sum[] sums;
-    private final double[] bounds;
-    private long evaluations;
-    private Integral.Status status = Integral.Status.REACHED;
-    private Optional<Vector3> nonFiniteAt = Optional.empty();
-
-    Totals(int densities) {
-      this.densities = densities;
-      sums = new Sum[RayIntegrals.rows(densities)];
-      bounds = new double[sums.length];
-      for (int k = 0; k < sums.length; k++) {
-        sums[k] = Sum.create();
-      }
-    }
-
-    void add(Integral[] parts) {
-      for (int k = 0; k < sums.length; k++) {
-        sums[k].add(parts[k].value());
-        bounds[k] += parts[k].errorBound();
-      }
-      evaluations += parts[0].evaluations();
-      status = parts[0].reached() ? status : parts[0].status();
-    }
-
-    boolean isFinite() {
-      return nonFiniteAt.isEmpty();
-    }
-
-    /** The bound of the outer integral and that of the inner ones. */
-    double errorBound(int density) {
-      double inner = sums[densities + 1].getAsDouble();
-      return bounds[density] + (density == 0 ? Math.abs(inner) + bounds[densities + 1] : 0);
-    }
-
-    double magnitude() {
-      return Math.abs(sums[densities].getAsDouble());
-    }
-
-    double magnitudeError() {
-      return bounds[densities];
-    }
-
-    Outcome outcome() {
-      List<Double> values = new ArrayList<>();
-      List<Double> errors = new ArrayList<>();
-      for (int k = 0; k < densities; k++) {
-        values.add(sums[k].getAsDouble());
-        errors.add(errorBound(k));
-      }
-      Integral.Status reached = isFinite() ? status : Integral.Status.NOT_FINITE;
-      return new Outcome(values, errors, magnitude(), evaluations, reached, nonFiniteAt);
-    }
   }
 }

@@ -8,6 +8,7 @@ import java.util.Optional;
 import java.util.OptionalDouble;
 import org.hullsum.expression.BatchEvaluator;
 import org.hullsum.expression.Expression;
+import org.hullsum.expression.Hazard;
 import org.hullsum.expression.IntervalEvaluator;
 import org.hullsum.field.Coordinates;
 import org.hullsum.field.VectorField;
@@ -24,15 +25,14 @@ import org.hullsum.numeric.Vector3;
 final class HazardCheck {
   private static final List<String> SPACE = List.of("x", "y", "z");
 
-  private final List<Hazard> hazards;
-  private final List<Integer> firstGuard = new ArrayList<>();
   private final double instant;
+  private final int count;
   private final IntervalEvaluator natives;
   private final IntervalEvaluator.Workspace nativesWorkspace;
-  private final IntervalEvaluator arguments;
-  private final IntervalEvaluator.Workspace argumentsWorkspace;
+  private final IntervalEvaluator enclosures;
+  private final IntervalEvaluator.Workspace enclosuresWorkspace;
   private final Interval[] nativeRanges;
-  private final Interval[] argumentRanges;
+  private final Interval[] ranges;
   private final BatchEvaluator nativePoints;
   private final BatchEvaluator.Workspace nativePointsWorkspace;
   private final BatchEvaluator formulas;
@@ -44,22 +44,16 @@ final class HazardCheck {
       List<Expression> formulas,
       Map<String, Double> constants,
       OptionalDouble instant) {
-    this.hazards = Hazards.in(formulas, constants);
     this.instant = instant.orElse(0);
-    List<Expression> watched = new ArrayList<>();
-    hazards.forEach(hazard -> watched.add(hazard.argument()));
-    for (Hazard hazard : hazards) {
-      firstGuard.add(watched.size());
-      hazard.guards().forEach(guard -> watched.add(guard.condition()));
-    }
+    this.count = names.size();
     List<String> variables = new ArrayList<>(names);
     variables.add(InputSensitivity.TIME);
     this.natives = IntervalEvaluator.compile(SPACE, constants, definitions);
     this.nativesWorkspace = natives.workspace();
-    this.arguments = IntervalEvaluator.compile(variables, constants, watched);
-    this.argumentsWorkspace = arguments.workspace();
+    this.enclosures = IntervalEvaluator.compile(variables, constants, formulas);
+    this.enclosuresWorkspace = enclosures.workspace();
     this.nativeRanges = new Interval[variables.size()];
-    this.argumentRanges = new Interval[watched.size()];
+    this.ranges = new Interval[formulas.size()];
     this.nativePoints = BatchEvaluator.compile(SPACE, constants, definitions);
     this.nativePointsWorkspace = nativePoints.workspace();
     this.formulas = BatchEvaluator.compile(variables, constants, formulas);
@@ -83,9 +77,9 @@ final class HazardCheck {
     return new HazardCheck(SPACE, position, List.of(density), constants, instant);
   }
 
-  /** Whether the formulas have no hazards at all, wherever they are evaluated. */
+  /** Whether the formulas are defined wherever they are evaluated. */
   boolean none() {
-    return hazards.isEmpty();
+    return enclosures.hazards().isEmpty();
   }
 
   /**
@@ -95,32 +89,23 @@ final class HazardCheck {
    */
   Optional<Hazard> possible(Interval[] space) {
     natives.evaluate(space, nativeRanges, nativesWorkspace);
-    nativeRanges[nativeRanges.length - 1] = Interval.point(instant);
-    arguments.evaluate(nativeRanges, argumentRanges, argumentsWorkspace);
+    nativeRanges[count] = Interval.point(instant);
+    enclosures.evaluate(nativeRanges, ranges, enclosuresWorkspace);
+    List<Hazard> hazards = enclosures.hazards();
     for (int k = 0; k < hazards.size(); k++) {
-      Hazard hazard = hazards.get(k);
-      if (hazard.kind().possible(argumentRanges[k]) && guarded(hazard, firstGuard.get(k))) {
-        return Optional.of(hazard);
+      if (enclosures.mayBeUndefined(k, enclosuresWorkspace)) {
+        return Optional.of(hazards.get(k));
       }
     }
     return Optional.empty();
   }
 
-  private boolean guarded(Hazard hazard, int first) {
-    for (int g = 0; g < hazard.guards().size(); g++) {
-      if (!hazard.guards().get(g).possible(argumentRanges[first + g])) {
-        return false;
-      }
-    }
-    return true;
-  }
-
   /** The largest absolute value of the formulas at a point; NaN where one is undefined. */
   double size(Vector3 point) {
     double[][] at = {{point.x()}, {point.y()}, {point.z()}};
-    double[][] inputs = new double[nativeRanges.length][1];
-    nativePoints.evaluate(at, 1, Arrays.copyOf(inputs, inputs.length - 1), nativePointsWorkspace);
-    inputs[inputs.length - 1][0] = instant;
+    double[][] inputs = new double[count + 1][1];
+    nativePoints.evaluate(at, 1, Arrays.copyOf(inputs, count), nativePointsWorkspace);
+    inputs[count][0] = instant;
     double[][] values = new double[formulas.outputCount()][1];
     formulas.evaluate(inputs, 1, values, formulasWorkspace);
     double largest = 0;

@@ -4,7 +4,7 @@ import java.util.ArrayDeque;
 import java.util.Deque;
 import java.util.List;
 import java.util.Optional;
-import org.hullsum.expression.Printer;
+import org.hullsum.expression.Hazard;
 import org.hullsum.numeric.Interval;
 import org.hullsum.numeric.Vector3;
 
@@ -101,7 +101,7 @@ final class HazardSearch {
       if (standing == HazardDomain.Standing.INSIDE) {
         Vector3 point = domain.place(generalPart(next.box));
         if (!Double.isFinite(check.size(point))) {
-          return new SingularityOutcome.FoundAt(point, Printer.print(hazard.get().part()));
+          return new SingularityOutcome.FoundAt(point, hazard.get().toString());
         }
       }
       boolean isPlace = next.width <= PLACE;
@@ -159,7 +159,7 @@ final class HazardSearch {
   private SingularityOutcome judge(
       Interval[] box, HazardDomain.Standing standing, Hazard hazard, boolean isPlace) {
     Vector3 place = domain.place(box);
-    String part = Printer.print(hazard.part());
+    String part = hazard.toString();
     if (isPlace) {
       for (List<Vector3> approach : domain.approaches(box, standing)) {
         if (growsWithoutBound(approach)) {

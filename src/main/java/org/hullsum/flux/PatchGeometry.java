@@ -111,8 +111,7 @@ public record PatchGeometry(
   }
 
   /** Area element, N, and the moments in units of the patch's size. */
-  private static List<Expression> integrands(
-      PulledBackChart chart, Vector3 reference, double size) {
+  static List<Expression> integrands(PulledBackChart chart, Vector3 reference, double size) {
     VectorExpression normal = chart.areaVector();
     VectorExpression offset =
         chart

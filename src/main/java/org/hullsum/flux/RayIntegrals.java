@@ -5,8 +5,8 @@ import org.hullsum.numeric.Vector3;
 import org.hullsum.quadrature.GaussRule;
 
 /**
- * The inner integrals of the cone formula, ∫_0^1 g(p + s(r − p)) s² ds, for many end points r at
- * once.
+ * Integrals of densities along straight rays, ∫_0^1 g(p + s(r − p)) s^k ds, for many rays at once:
+ * k = 2 for cones, 0 for columns.
  *
  * <p>For polynomials one Gauss rule is exact. Otherwise two rules of different sizes are compared;
  * where they differ by more than the tolerance, or a density switches along the ray, the ray is
@@ -23,7 +23,7 @@ final class RayIntegrals {
   static final int BLOCK = 4096;
 
   private final Densities densities;
-  private final Vector3 apex;
+  private final int power;
   private final RayRefiner refiner;
   private final GaussRule[] rules;
   private final double tolerance;
@@ -32,24 +32,24 @@ final class RayIntegrals {
   private final double[][] switchValues;
 
   /**
-   * @param apex p
+   * @param power k
    * @param level how large the rules are; of no account for polynomials
    * @param tolerance allowed error of a ray's integral of the first density
    */
-  RayIntegrals(Densities densities, Vector3 apex, int level, double tolerance) {
+  RayIntegrals(Densities densities, int power, int level, double tolerance) {
     this.densities = densities;
-    this.apex = apex;
+    this.power = power;
     this.tolerance = tolerance;
-    this.rules = rules(densities, level);
+    this.rules = rules(densities, power, level);
     this.values = new double[densities.count()][BLOCK];
     this.switchValues = new double[densities.switchCount()][BLOCK];
-    this.refiner = new RayRefiner(densities, tolerance);
+    this.refiner = new RayRefiner(densities, power, tolerance);
   }
 
-  private static GaussRule[] rules(Densities densities, int level) {
+  private static GaussRule[] rules(Densities densities, int power, int level) {
     if (densities.degree().isPresent()) {
-      // n nodes are exact to degree 2n − 1, and s² adds two.
-      int nodes = (densities.degree().getAsInt() + 2) / 2 + 1;
+      // n nodes are exact to degree 2n − 1.
+      int nodes = (densities.degree().getAsInt() + power) / 2 + 1;
       if (nodes <= GaussRule.LARGEST) {
         return new GaussRule[] {GaussRule.of(nodes)};
       }
@@ -57,17 +57,20 @@ final class RayIntegrals {
     return new GaussRule[] {GaussRule.of(LEVELS[level][0]), GaussRule.of(LEVELS[level][1])};
   }
 
-  /** Rows that {@link #integrate} writes: one per density, then ∫|g| s² ds of the first, error. */
+  /** Rows that {@link #integrate} writes: one per density, then ∫|g| s^k ds of the first, error. */
   static int rows(int densities) {
     return densities + 2;
   }
 
   /**
-   * Integrates along the rays to the given end points.
+   * Integrates along rays.
    *
+   * @param starts rows x, y, z of their starts p
+   * @param ends rows x, y, z of their ends r
    * @param wanted the rays that count; the others are set to zero
    */
-  void integrate(int count, double[][] ends, boolean[] wanted, double[][] results) {
+  void integrate(
+      int count, double[][] starts, double[][] ends, boolean[] wanted, double[][] results) {
     int nodes = 0;
     for (GaussRule rule : rules) {
       nodes += rule.size();
@@ -84,14 +87,15 @@ final class RayIntegrals {
         }
       }
       if (n == chunk || (i == count - 1 && n > 0)) {
-        integrate(rays, n, nodes, ends, results);
+        integrate(rays, n, nodes, starts, ends, results);
         n = 0;
       }
     }
   }
 
-  private void integrate(int[] rays, int n, int nodes, double[][] ends, double[][] results) {
-    place(rays, n, nodes, ends);
+  private void integrate(
+      int[] rays, int n, int nodes, double[][] starts, double[][] ends, double[][] results) {
+    place(rays, n, nodes, starts, ends);
     int total = n * nodes;
     densities.evaluate(total, points[0], points[1], points[2], values);
     if (densities.switchCount() > 0) {
@@ -103,16 +107,17 @@ final class RayIntegrals {
       sum(k * nodes, ray, results);
       if (tolerance < Double.POSITIVE_INFINITY
           && (switches(k * nodes, nodes) || !(results[errorRow][ray] <= tolerance))) {
+        Vector3 start = new Vector3(starts[0][ray], starts[1][ray], starts[2][ray]);
         Vector3 end = new Vector3(ends[0][ray], ends[1][ray], ends[2][ray]);
-        refiner.refine(apex, end, ray, results);
+        refiner.refine(start, end, ray, results);
       }
     }
   }
 
-  private void place(int[] rays, int n, int nodes, double[][] ends) {
+  private void place(int[] rays, int n, int nodes, double[][] starts, double[][] ends) {
     for (int axis = 0; axis < 3; axis++) {
-      double from = apex.component(axis);
       for (int k = 0; k < n; k++) {
+        double from = starts[axis][rays[k]];
         double span = ends[axis][rays[k]] - from;
         int at = k * nodes;
         for (GaussRule rule : rules) {
@@ -137,7 +142,7 @@ final class RayIntegrals {
         absolute = 0;
         for (int j = 0; j < rule.size(); j++) {
           double s = rule.node(j);
-          double term = rule.weight(j) * s * s * values[k][at++];
+          double term = rule.weight(j) * power(s) * values[k][at++];
           sum += term;
           absolute += Math.abs(term);
         }
@@ -152,6 +157,10 @@ final class RayIntegrals {
       }
     }
     results[count + 1][ray] = error;
+  }
+
+  private double power(double s) {
+    return power == 2 ? s * s : 1;
   }
 
   private boolean switches(int first, int nodes) {
@@ -170,7 +179,8 @@ final class RayIntegrals {
   }
 
   /** The smallest level whose error is within the tolerance on most of the given rays. */
-  static int level(Densities densities, Vector3 apex, double[][] ends, double tolerance) {
+  static int level(
+      Densities densities, int power, double[][] starts, double[][] ends, double tolerance) {
     if (densities.degree().isPresent()) {
       return 0;
     }
@@ -180,8 +190,8 @@ final class RayIntegrals {
     double[][] results = new double[rows(densities.count())][count];
     for (int level = 0; level < LEVELS.length - 1; level++) {
       // Without a tolerance no ray is refined here.
-      new RayIntegrals(densities, apex, level, Double.POSITIVE_INFINITY)
-          .integrate(count, ends, all, results);
+      new RayIntegrals(densities, power, level, Double.POSITIVE_INFINITY)
+          .integrate(count, starts, ends, all, results);
       int poor = 0;
       for (double error : results[densities.count() + 1]) {
         poor += error <= tolerance ? 0 : 1;

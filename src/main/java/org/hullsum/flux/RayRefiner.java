@@ -5,11 +5,12 @@ import org.hullsum.numeric.Vector3;
 import org.hullsum.quadrature.GaussRule;
 
 /**
- * One ray at a time: ∫_0^1 g(p + s(r − p)) s² ds, split where a density switches and halved where
+ * One ray at a time: ∫_0^1 g(p + s(r − p)) s^k ds, split where a density switches and halved where
  * two Gauss rules disagree.
  *
  * <p>The worst piece is halved until the sum of the differences is within the tolerance or the
- * number of pieces reaches its bound; that sum is the error that is reported. Not thread-safe.
+ * number of pieces, of the ray or of all rays, reaches its bound; that sum is the error that is
+ * reported. Not thread-safe.
  */
 final class RayRefiner {
   private static final GaussRule SMALL = GaussRule.of(8);
@@ -19,6 +20,9 @@ final class RayRefiner {
   /** Most pieces of one ray. */
   private static final int MOST_PIECES = 96;
 
+  /** Most pieces of all rays together; after that no ray is halved any more. */
+  private static final long MOST_WORK = 200_000;
+
   /** Points at which the signs of the switch functions are looked at. */
   private static final int WATCHED = 33;
 
@@ -26,40 +30,43 @@ final class RayRefiner {
   private static final int HALVINGS = 52;
 
   private final Densities densities;
+  private final int power;
   private final double tolerance;
   private final double[][] at = new double[3][Math.max(WATCHED, NODES)];
   private final double[][] values;
   private final double[][] switchValues;
-  private final double[] from = new double[MOST_PIECES];
-  private final double[] to = new double[MOST_PIECES];
+  private final double[] lows = new double[MOST_PIECES];
+  private final double[] highs = new double[MOST_PIECES];
   private final double[] error = new double[MOST_PIECES];
   private final double[][] results;
   private Vector3 start = Vector3.ZERO;
   private Vector3 span = Vector3.ZERO;
   private int pieces;
+  private long work;
 
-  RayRefiner(Densities densities, double tolerance) {
+  RayRefiner(Densities densities, int power, double tolerance) {
     this.densities = densities;
+    this.power = power;
     this.tolerance = tolerance;
     this.values = new double[densities.count()][at[0].length];
     this.switchValues = new double[densities.switchCount()][at[0].length];
     this.results = new double[MOST_PIECES][RayIntegrals.rows(densities.count())];
   }
 
-  /** Integrates along the ray from p to an end point, into column {@code ray} of the rows. */
-  void refine(Vector3 apex, Vector3 end, int ray, double[][] rows) {
-    start = apex;
-    span = end.minus(apex);
+  /** Integrates along the ray from p to r, into column {@code ray} of the rows. */
+  void refine(Vector3 from, Vector3 end, int ray, double[][] rows) {
+    start = from;
+    span = end.minus(from);
     split();
     for (int piece = 0; piece < pieces; piece++) {
       integrate(piece);
     }
-    while (pieces < MOST_PIECES && !(totalError() <= tolerance)) {
+    while (pieces < MOST_PIECES && work < MOST_WORK && !(totalError() <= tolerance)) {
       int worst = worst();
-      double middle = 0.5 * (from[worst] + to[worst]);
-      from[pieces] = middle;
-      to[pieces] = to[worst];
-      to[worst] = middle;
+      double middle = 0.5 * (lows[worst] + highs[worst]);
+      lows[pieces] = middle;
+      highs[pieces] = highs[worst];
+      highs[worst] = middle;
       integrate(worst);
       integrate(pieces++);
     }
@@ -116,8 +123,8 @@ final class RayRefiner {
     for (int i = 0; i < count; i++) {
       double next = i + 1 < count ? breaks[i + 1] : 1;
       if (next > breaks[i]) {
-        from[pieces] = breaks[i];
-        to[pieces++] = next;
+        lows[pieces] = breaks[i];
+        highs[pieces++] = next;
       }
     }
   }
@@ -151,21 +158,22 @@ final class RayRefiner {
 
   private void integrate(int piece) {
     double[] s = new double[NODES];
-    double low = from[piece];
-    double width = to[piece] - low;
+    double low = lows[piece];
+    double width = highs[piece] - low;
     for (int i = 0; i < NODES; i++) {
       double node = i < SMALL.size() ? SMALL.node(i) : LARGE.node(i - SMALL.size());
       s[i] = low + width * node;
     }
     place(NODES, s);
     densities.evaluate(NODES, at[0], at[1], at[2], values);
+    work++;
     int count = densities.count();
     for (int k = 0; k < count; k++) {
       double small = 0;
       double large = 0;
       double absolute = 0;
       for (int i = 0; i < NODES; i++) {
-        double value = s[i] * s[i] * values[k][i] * width;
+        double value = (power == 2 ? s[i] * s[i] : 1) * values[k][i] * width;
         if (i < SMALL.size()) {
           small += SMALL.weight(i) * value;
         } else {

@@ -43,7 +43,7 @@ public sealed interface SingularityOutcome {
    * A place at which the formula is undefined, or near which it grows without bound.
    *
    * @param place in working units
-   * @param part the text of the part that is at fault
+   * @param part what is at fault, such as {@code x^2 + y^2 is zero}
    */
   record FoundAt(Vector3 place, String part) implements SingularityOutcome {
     public FoundAt {
@@ -67,7 +67,7 @@ public sealed interface SingularityOutcome {
    * limit.
    *
    * @param place near which it can't be excluded
-   * @param part the text of the part that is in doubt
+   * @param part what is in doubt, such as {@code x is zero}
    */
   record NotExcluded(Vector3 place, String part) implements SingularityOutcome {
     public NotExcluded {

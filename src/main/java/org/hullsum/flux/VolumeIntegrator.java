@@ -14,7 +14,6 @@ import org.hullsum.expression.Expression;
 import org.hullsum.expression.Simplifier;
 import org.hullsum.expression.Switches;
 import org.hullsum.expression.Symbols;
-import org.hullsum.numeric.Vector3;
 import org.hullsum.quadrature.Integral;
 
 /**
@@ -31,21 +30,8 @@ import org.hullsum.quadrature.Integral;
 public final class VolumeIntegrator {
   private static final Set<String> SPACE = Set.of("x", "y", "z");
 
-  /** Points of each chart for the first apex, and for the others. */
-  private static final long FIRST_LIMIT = 400_000;
-
-  private static final long OTHER_LIMIT = 100_000;
-
   /** Relative accuracy of integrals that are differenced. */
   private static final double DIFFERENCE_ACCURACY = 1e-10;
-
-  /** Where other apexes lie, relative to the middle and the diagonal of the box. */
-  private static final List<Vector3> OFFSETS =
-      List.of(
-          Vector3.ZERO,
-          new Vector3(0.11, 0.07, 0.05),
-          new Vector3(-0.19, 0.23, 0.31),
-          new Vector3(0.9, -0.8, 0.7));
 
   private final InputSensitivity inputs;
   private final double relative;
@@ -77,35 +63,20 @@ public final class VolumeIntegrator {
     List<Expression> densities = new ArrayList<>();
     densities.add(g);
     varying.forEach(name -> densities.add(Derivative.of(g, name)));
-    ConeRoute cones =
-        new ConeRoute(boundary, densities, inputs.values(), instant, region.box().diagonal());
-    Optional<VolumeIntegral> best = Optional.empty();
-    long limit = FIRST_LIMIT;
-    for (Vector3 apex : apexes(region)) {
-      ConeRoute.Outcome outcome = cones.from(apex, relative, enough, limit);
-      limit = OTHER_LIMIT;
-      VolumeIntegral integral = integral(outcome, apex);
-      if (outcome.status() == Integral.Status.REACHED) {
-        return withSensitivities(integral, outcome.values(), varying, boundary, g, instant);
-      }
-      best = better(best, integral);
-    }
-    return best.orElseThrow();
-  }
-
-  private static List<Vector3> apexes(EnclosedRegion region) {
-    List<Vector3> apexes = new ArrayList<>();
-    apexes.add(region.centroid());
-    Vector3 middle = region.box().centre();
-    OFFSETS.forEach(offset -> apexes.add(middle.plus(offset.times(region.box().diagonal()))));
-    return apexes;
-  }
-
-  private static Optional<VolumeIntegral> better(
-      Optional<VolumeIntegral> best, VolumeIntegral candidate) {
-    return best.isPresent() && best.get().errorBound() <= candidate.errorBound()
-        ? best
-        : Optional.of(candidate);
+    VolumeRoutes.Found found =
+        new VolumeRoutes(boundary, densities, inputs.values(), instant).best(relative, enough);
+    DensityOutcome outcome = found.outcome();
+    boolean finite = outcome.isFinite();
+    return new VolumeIntegral(
+        finite ? Optional.of(outcome.values().get(0)) : Optional.empty(),
+        finite ? outcome.errorBounds().get(0) : Double.POSITIVE_INFINITY,
+        finite ? outcome.magnitude() : 0,
+        finite ? sensitivities(outcome, varying, boundary, g, instant) : Map.of(),
+        found.evaluations(),
+        outcome.status(),
+        found.route(),
+        found.apex(),
+        outcome.nonFiniteAt());
   }
 
   private VolumeIntegral constant(
@@ -133,66 +104,43 @@ public final class VolumeIntegrator {
         finite ? Optional.empty() : Optional.of(region.centroid()));
   }
 
-  private static VolumeIntegral integral(ConeRoute.Outcome outcome, Vector3 apex) {
-    boolean finite = outcome.nonFiniteAt().isEmpty();
-    return new VolumeIntegral(
-        finite ? Optional.of(outcome.values().get(0)) : Optional.empty(),
-        finite ? outcome.errorBounds().get(0) : Double.POSITIVE_INFINITY,
-        finite ? outcome.magnitude() : 0,
-        Map.of(),
-        outcome.evaluations(),
-        outcome.status(),
-        VolumeIntegral.Route.CONES,
-        Optional.of(apex),
-        outcome.nonFiniteAt());
-  }
-
-  private VolumeIntegral withSensitivities(
-      VolumeIntegral bare,
-      List<Double> values,
+  private Map<String, Double> sensitivities(
+      DensityOutcome outcome,
       List<String> varying,
       List<BoundaryPatch> boundary,
       Expression g,
       OptionalDouble instant) {
     Map<String, Double> partials = BoundaryMotion.terms(boundary, g, inputs, instant);
     for (int k = 0; k < varying.size(); k++) {
-      partials.merge(varying.get(k), values.get(k + 1), Double::sum);
+      partials.merge(varying.get(k), outcome.values().get(k + 1), Double::sum);
     }
     Map<String, Double> sensitivities = inputs.toBases(partials);
-    Set<String> moving = inputs.basesOf(inputs.varyingIn(Switches.jumps(g)));
-    for (String base : moving) {
-      sensitivities.put(base, difference(base, boundary, g, instant, bare.apex().orElseThrow()));
+    for (String base : inputs.basesOf(inputs.varyingIn(Switches.jumps(g)))) {
+      sensitivities.put(base, difference(base, boundary, g, instant));
     }
-    return new VolumeIntegral(
-        bare.value(),
-        bare.errorBound(),
-        bare.magnitude(),
-        sensitivities,
-        bare.evaluations(),
-        bare.status(),
-        bare.route(),
-        bare.apex(),
-        bare.nonFiniteAt());
+    return sensitivities;
   }
 
   /** Over ± one standard uncertainty: the input moves a surface on which the density jumps. */
   private double difference(
-      String base,
-      List<BoundaryPatch> boundary,
-      Expression g,
-      OptionalDouble instant,
-      Vector3 apex) {
+      String base, List<BoundaryPatch> boundary, Expression g, OptionalDouble instant) {
     double step = inputs.standardUncertainty(base);
     double centre = inputs.values().get(base);
-    double[] ends = new double[2];
-    for (int side = 0; side < 2; side++) {
-      Map<String, Double> values =
-          inputs.valuesWith(base, side == 0 ? centre - step : centre + step);
-      ConeRoute cones =
-          new ConeRoute(
-              boundary, List.of(g), values, instant, EnclosedRegion.of(boundary).box().diagonal());
-      ends[side] = cones.from(apex, DIFFERENCE_ACCURACY, 0, FIRST_LIMIT).values().get(0);
-    }
-    return (ends[1] - ends[0]) / (2 * step);
+    double above = valueWith(base, centre + step, boundary, g, instant);
+    double below = valueWith(base, centre - step, boundary, g, instant);
+    return (above - below) / (2 * step);
+  }
+
+  private double valueWith(
+      String base,
+      double value,
+      List<BoundaryPatch> boundary,
+      Expression g,
+      OptionalDouble instant) {
+    return new VolumeRoutes(boundary, List.of(g), inputs.valuesWith(base, value), instant)
+        .best(DIFFERENCE_ACCURACY, 0)
+        .outcome()
+        .values()
+        .get(0);
   }
 }

@@ -194,4 +194,18 @@ class FacingFinderTest {
             .anyMatch(f -> f.reason().equals(Optional.of(Reason.POINTS_AT_ODDS))),
         "" + facings);
   }
+
+  /** A cap that is half a percent of its sphere, on the disk that closes it. */
+  @Test
+  void smallPartThatTheTrimLeavesIsFound() {
+    double height = 0.99;
+    org.hullsum.geometry.Body above =
+        new org.hullsum.geometry.Body.HalfSpace(
+            Assemblies.point(0, 0, height), Vector3.Z.negated());
+    List<Surface> surfaces =
+        List.of(
+            Assemblies.trimmed(Assemblies.sphere(Vector3.ZERO, 1), List.of(above), List.of()),
+            Assemblies.disk(new Vector3(0, 0, height), Vector3.Z, Math.sqrt(1 - height * height)));
+    assertEquals(List.of(Side.OUT, Side.IN), sides(find(surfaces)));
+  }
 }

@@ -93,4 +93,47 @@ class VolumeIntegratorTest {
     assertEquals(exact, integral.value().orElseThrow(), integral.errorBound());
     assertTrue(integral.errorBound() < 1e-7, "" + integral);
   }
+
+  /** Singular on the axis, which is in the hole: ∫ dV/ρ² = 2π H ln(R/r). */
+  @Test
+  void densitySingularInTheHoleOfAnAnnulusIsIntegratedRightly() {
+    VolumeIntegral integral =
+        integrate(Assemblies.hollowCan(0.3, 1, 2), TestFields.parse("1/(x^2+y^2)"));
+    double exact = 4 * Math.PI * Math.log(1 / 0.3);
+    assertEquals(exact, integral.value().orElseThrow(), integral.errorBound(), "" + integral);
+    assertEquals(exact, integral.value().orElseThrow(), 1e-9, "" + integral);
+  }
+
+  /** Not integrable over the hole: ∫ dV/ρ³ = 2π H (1/r − 1/R). */
+  @Test
+  void densityNotIntegrableInTheHoleOfAnAnnulusTakesTheColumnRoute() {
+    VolumeIntegral integral =
+        integrate(Assemblies.hollowCan(0.3, 1, 2), TestFields.parse("(x^2+y^2)^(-1.5)"));
+    double exact = 4 * Math.PI * (1 / 0.3 - 1);
+    assertEquals(VolumeIntegral.Route.COLUMNS, integral.route(), "" + integral);
+    assertEquals(exact, integral.value().orElseThrow(), integral.errorBound(), "" + integral);
+    assertEquals(exact, integral.value().orElseThrow(), 1e-8, "" + integral);
+  }
+
+  /** A pole that changes its sign in the hole, beside the axis. */
+  @Test
+  void densityWithAPoleInTheHoleIsIntegratedRightly() {
+    Assembly annulus = Assemblies.hollowCan(0.3, 1, 2);
+    VolumeIntegral integral = integrate(annulus, TestFields.parse("1/((x-0.1)^2+y^2)"));
+    double byMeanValue = integral.value().orElseThrow();
+    // ∮ dθ/|ρe − a|² = 2π/(ρ² − a²), so the integral is 2π H ½ ln((R² − a²)/(r² − a²)).
+    double exact = 2 * Math.PI * Math.log((1 - 0.01) / (0.09 - 0.01));
+    assertEquals(exact, byMeanValue, integral.errorBound(), "" + integral);
+    assertEquals(exact, byMeanValue, 1e-8, "" + integral);
+  }
+
+  /** The divergence 1/ρ of the unit radial field on a can about the axis: 2π R H. */
+  @Test
+  void integrableSingularityOnTheAxisInsideIsIntegrated() {
+    VolumeIntegral integral =
+        integrate(Assemblies.can(0.8, 0, 1.5), TestFields.parse("1/sqrt(x^2+y^2)"));
+    double exact = 2 * Math.PI * 0.8 * 1.5;
+    assertEquals(exact, integral.value().orElseThrow(), integral.errorBound(), "" + integral);
+    assertEquals(exact, integral.value().orElseThrow(), 1e-8, "" + integral);
+  }
 }
