@@ -95,9 +95,8 @@ record SingularityAudit(
                   + scales.place(outcome.place())
                   + " in `"
                   + name
-                  + "`, by `"
-                  + outcome.part()
-                  + "`",
+                  + "`, where "
+                  + outcome.part(),
               outcome.place(),
               outcome.part()));
     }
@@ -113,9 +112,8 @@ record SingularityAudit(
                   + scales.place(outcome.place())
                   + " in `"
                   + name
-                  + "` could not be excluded, by `"
-                  + outcome.part()
-                  + "`",
+                  + "` could not be excluded: there "
+                  + outcome.part(),
               outcome.place(),
               outcome.part()));
     }

@@ -118,6 +118,25 @@ final class ColumnIntegrand implements SquareIntegrand {
         values[c][owners[k]] += weights[k] * results[c][k];
       }
     }
+    spread(stretches, values[components - 1]);
+  }
+
+  /** Lines that stand in for one in doubt are as wrong as they are at odds with one another. */
+  private void spread(int stretches, double[] innerError) {
+    int begin = 0;
+    while (begin < stretches) {
+      double least = Double.POSITIVE_INFINITY;
+      double most = Double.NEGATIVE_INFINITY;
+      int end = begin;
+      while (end < stretches && owners[end] == owners[begin]) {
+        double share = weights[end] * results[0][end];
+        least = Math.min(least, share);
+        most = Math.max(most, share);
+        end++;
+      }
+      innerError[owners[begin]] += (end - begin) * (most - least);
+      begin = end;
+    }
   }
 
   private void enter(int at, Columns.Stretch stretch) {

@@ -139,7 +139,8 @@ final class ColumnRoute {
     }
   }
 
-  private Optional<DensityOutcome> integrate(Look look, double relative, double enough, long limit) {
+  private Optional<DensityOutcome> integrate(
+      Look look, double relative, double enough, long limit) {
     Densities evaluated = new Densities(densities, constants, instant, size, RayIntegrals.BLOCK);
     int count = look.stretches.size();
     double[][] starts = new double[3][count];

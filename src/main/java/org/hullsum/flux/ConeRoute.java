@@ -77,7 +77,8 @@ final class ConeRoute {
     Densities evaluated = new Densities(densities, constants, instant, size, RayIntegrals.BLOCK);
     Coarse coarse = look(evaluated, apex);
     double magnitude = Math.max(coarse.magnitude, LEAST_SHARE * coarse.coneMagnitude);
-    DensityTotals totals = pass(evaluated, apex, coarse, Math.max(relative * magnitude, enough), limit);
+    DensityTotals totals =
+        pass(evaluated, apex, coarse, Math.max(relative * magnitude, enough), limit);
     if (totals.isFinite()
         && totals.errorBound(0) > Math.max(relative * totals.magnitude(), enough)) {
       // The coarse look took the region for larger than it is.

@@ -30,6 +30,8 @@ final class RayIntegrals {
   private final double[][] points = new double[3][BLOCK];
   private final double[][] values;
   private final double[][] switchValues;
+  private final double[][] tips = new double[3][BLOCK];
+  private final double[][] tipValues;
 
   /**
    * @param power k
@@ -43,6 +45,7 @@ final class RayIntegrals {
     this.rules = rules(densities, power, level);
     this.values = new double[densities.count()][BLOCK];
     this.switchValues = new double[densities.switchCount()][BLOCK];
+    this.tipValues = new double[densities.switchCount()][BLOCK];
     this.refiner = new RayRefiner(densities, power, tolerance);
   }
 
@@ -100,13 +103,20 @@ final class RayIntegrals {
     densities.evaluate(total, points[0], points[1], points[2], values);
     if (densities.switchCount() > 0) {
       densities.evaluateSwitches(total, points[0], points[1], points[2], switchValues);
+      for (int axis = 0; axis < 3; axis++) {
+        for (int k = 0; k < n; k++) {
+          tips[axis][2 * k] = starts[axis][rays[k]];
+          tips[axis][2 * k + 1] = ends[axis][rays[k]];
+        }
+      }
+      densities.evaluateSwitches(2 * n, tips[0], tips[1], tips[2], tipValues);
     }
     int errorRow = densities.count() + 1;
     for (int k = 0; k < n; k++) {
       int ray = rays[k];
       sum(k * nodes, ray, results);
       if (tolerance < Double.POSITIVE_INFINITY
-          && (switches(k * nodes, nodes) || !(results[errorRow][ray] <= tolerance))) {
+          && (switches(k, nodes) || !(results[errorRow][ray] <= tolerance))) {
         Vector3 start = new Vector3(starts[0][ray], starts[1][ray], starts[2][ray]);
         Vector3 end = new Vector3(ends[0][ray], ends[1][ray], ends[2][ray]);
         refiner.refine(start, end, ray, results);
@@ -163,15 +173,21 @@ final class RayIntegrals {
     return power == 2 ? s * s : 1;
   }
 
-  private boolean switches(int first, int nodes) {
-    for (double[] function : switchValues) {
+  /** Whether a switch function changes sign among a ray's nodes, or between them and its ends. */
+  private boolean switches(int ray, int nodes) {
+    int first = ray * nodes;
+    for (int f = 0; f < switchValues.length; f++) {
+      double[] function = switchValues[f];
       double low = Double.POSITIVE_INFINITY;
       double high = Double.NEGATIVE_INFINITY;
       for (int j = first; j < first + nodes; j++) {
         low = Math.min(low, function[j]);
         high = Math.max(high, function[j]);
       }
-      if (!(low > 0 || high < 0)) {
+      double atStart = tipValues[f][2 * ray];
+      double atEnd = tipValues[f][2 * ray + 1];
+      boolean steady = low > 0 ? Math.min(atStart, atEnd) >= 0 : Math.max(atStart, atEnd) <= 0;
+      if (!(low > 0 || high < 0) || !steady) {
         return true;
       }
     }

@@ -98,7 +98,8 @@ final class VolumeRoutes {
   /** Cones wherever they like, columns if no apex will do. */
   private Found regular(double relative, double enough) {
     ConeRoute cones = cones();
-    Found best = cones(cones.from(region.centroid(), relative, enough, FIRST_LIMIT), region.centroid(), 0);
+    Found best =
+        cones(cones.from(region.centroid(), relative, enough, FIRST_LIMIT), region.centroid(), 0);
     for (Vector3 apex : others()) {
       if (best.outcome.reached()) {
         return best;
@@ -122,7 +123,8 @@ final class VolumeRoutes {
     DensityOutcome first = cones.from(region.centroid(), relative, enough, IRREGULAR_LIMIT);
     Found byCones = cones(first, region.centroid(), columns.map(Found::evaluations).orElse(0L));
     for (Vector3 apex : first.isFinite() ? others() : List.<Vector3>of()) {
-      DensityOutcome next = cones.from(apex, Math.max(CONFIRMATION, relative), enough, IRREGULAR_LIMIT);
+      DensityOutcome next =
+          cones.from(apex, Math.max(CONFIRMATION, relative), enough, IRREGULAR_LIMIT);
       byCones = byCones.spent(next.evaluations());
       if (agree(first, next)) {
         return byCones;
