@@ -143,7 +143,7 @@ final class CaseFindings {
           Map.of());
     }
     surface.facings().ifPresent(f -> f.overlaps().forEach(o -> addOverlap(surface, o)));
-    boolean overlapping = surface.facings().filter(f -> !f.overlaps().isEmpty()).isPresent();
+    boolean overlapping = surface.overlaps();
     if (surface.openReason().isPresent() && !overlapping) {
       addOpen(surface);
     } else if (surface.bare().isEmpty() && !overlapping) {
@@ -173,10 +173,13 @@ final class CaseFindings {
 
   private void addOpen(SurfaceAudit surface) {
     Map<String, Object> evidence = new LinkedHashMap<>();
-    surface
-        .closure()
-        .ifPresent(
-            c -> evidence.put("closureVector", coordinates(scales.vectorArea(c.closureVector()))));
+    if (surface.determined()) {
+      surface
+          .closure()
+          .ifPresent(
+              c ->
+                  evidence.put("closureVector", coordinates(scales.vectorArea(c.closureVector()))));
+    }
     String where = "";
     if (surface.gap().isPresent()) {
       MomentClosure.PlaneGap gap = surface.gap().get();

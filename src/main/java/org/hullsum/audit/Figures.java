@@ -11,6 +11,9 @@ final class Figures {
   private static final int LARGEST_PLAIN_EXPONENT = 6;
   private static final int SMALLEST_PLAIN_EXPONENT = -4;
 
+  /** Components of a point below this share of the largest are rounding. */
+  private static final double NOTHING = 1e-12;
+
   private Figures() {}
 
   static String text(double value) {
@@ -32,8 +35,21 @@ final class Figures {
     return unit.equals("1") ? text(value) : text(value) + " " + unit;
   }
 
+  /** A point; what is nothing beside its largest component is written as 0. */
   static String point(Vector3 point) {
-    return "(" + text(point.x()) + ", " + text(point.y()) + ", " + text(point.z()) + ")";
+    double nothing =
+        NOTHING * Math.max(Math.abs(point.x()), Math.max(Math.abs(point.y()), Math.abs(point.z())));
+    return "("
+        + component(point.x(), nothing)
+        + ", "
+        + component(point.y(), nothing)
+        + ", "
+        + component(point.z(), nothing)
+        + ")";
+  }
+
+  private static String component(double value, double nothing) {
+    return Math.abs(value) <= nothing ? "0" : text(value);
   }
 
   /** A fraction as a percentage. */

@@ -21,8 +21,8 @@ import org.hullsum.numeric.Vector3;
  * @param bare the name of a patch without surface, where there is one
  * @param bounded whether any patch leaves or enters it
  * @param facings of the patches, in their order; empty where there are none
- * @param signs of the construction normals, +1 outward, as found or leaned to; empty where one is
- *     neither
+ * @param signs of the construction normals, +1 outward, as found; else, for explanations only, as
+ *     leaned to or declared; empty where one has none
  * @param closure with those signs
  * @param open whether the necessary conditions fail: with the facings found, or with any
  */
@@ -63,7 +63,10 @@ record SurfaceAudit(
     if (!open || bare.isPresent()) {
       return Optional.empty();
     }
-    return Optional.of("the surface of `" + volume.name() + "` is open");
+    return Optional.of(
+        "the surface of `"
+            + volume.name()
+            + (overlaps() ? "` does not close once: patches lie on one another" : "` is open"));
   }
 
   /** Why no region is enclosed, so that no volume integral can be taken. */
@@ -97,7 +100,7 @@ record SurfaceAudit(
                             + found.reason().get().words()));
   }
 
-  /** The boundary with the facings found, or leaned to. */
+  /** The boundary with those signs. */
   List<BoundaryPatch> boundary() {
     List<BoundaryPatch> boundary = new ArrayList<>();
     for (int i = 0; i < patches.size(); i++) {
@@ -153,9 +156,16 @@ record SurfaceAudit(
         gaps);
   }
 
-  /** The plane gap that the moments give, where no patch is missing anyway. */
+  /** Whether patches of it were seen to lie on one another. */
+  boolean overlaps() {
+    return facings.filter(f -> !f.overlaps().isEmpty()).isPresent();
+  }
+
+  /** The plane gap that the moments give, where no patch is missing, or there twice, anyway. */
   Optional<MomentClosure.PlaneGap> gap() {
-    return open && bare.isEmpty() ? closure.flatMap(MomentClosure::gap) : Optional.empty();
+    return open && bare.isEmpty() && !overlaps()
+        ? closure.flatMap(MomentClosure::gap)
+        : Optional.empty();
   }
 
   private String reason() {

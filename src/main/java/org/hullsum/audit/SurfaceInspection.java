@@ -58,13 +58,13 @@ final class SurfaceInspection {
     VolumeFacings facings =
         finder.find(surfaced.stream().map(p -> p.patch().surface().orElseThrow()).toList());
     List<SurfaceMoments> moments = surfaced.stream().map(SurfaceInspection::moments).toList();
-    Optional<List<Integer>> signs = signs(facings);
+    Optional<List<Integer>> signs = signs(facings, surfaced, volume);
     Optional<MomentClosure> closure =
         signs.map(s -> MomentClosure.of(moments, s, MomentClosure.USUAL_SLACK));
     boolean open =
         facings.determined()
             ? closure.filter(c -> !c.holds()).isPresent()
-            : MomentClosure.failsForEverySign(moments, MomentClosure.USUAL_SLACK).orElse(false);
+            : failsWhateverTheRest(facings, moments);
     return new SurfaceAudit(
         volume, surfaced, bare, bounded, Optional.of(facings), signs, closure, open);
   }
@@ -73,18 +73,49 @@ final class SurfaceInspection {
     return patch.leaves().equals(volume) || patch.enters().equals(volume);
   }
 
-  /** The sides found, or leaned to; empty where a patch has neither. */
-  private static Optional<List<Integer>> signs(VolumeFacings facings) {
+  /**
+   * The sides found; where a patch has none, the one leaned to or declared, which serves nothing
+   * but explanations. Empty where a patch has not even that.
+   */
+  private static Optional<List<Integer>> signs(
+      VolumeFacings facings, List<PatchAudit> patches, Volume volume) {
     List<Integer> signs = new ArrayList<>();
-    for (FoundFacing facing : facings.facings()) {
+    for (int i = 0; i < patches.size(); i++) {
+      FoundFacing facing = facings.facings().get(i);
       Optional<Side> side =
           facing.side() == Side.UNDETERMINED ? facing.leaning() : Optional.of(facing.side());
-      if (side.isEmpty()) {
+      PatchAudit patch = patches.get(i);
+      int declared = patch.patch().leaves().equals(volume.name()) ? patch.sign() : -patch.sign();
+      int sign = side.map(Side::sign).orElse(declared);
+      if (sign == 0) {
         return Optional.empty();
       }
-      signs.add(side.get().sign());
+      signs.add(sign);
     }
     return Optional.of(signs);
+  }
+
+  /**
+   * Whether the conditions fail whichever way the undetermined patches face. On a closed surface
+   * the sides found are right, so those that were found need not be tried both ways.
+   */
+  private static boolean failsWhateverTheRest(VolumeFacings facings, List<SurfaceMoments> moments) {
+    List<SurfaceMoments> found = new ArrayList<>();
+    List<Integer> signs = new ArrayList<>();
+    List<SurfaceMoments> tried = new ArrayList<>();
+    for (int i = 0; i < moments.size(); i++) {
+      Side side = facings.facings().get(i).side();
+      if (side == Side.UNDETERMINED) {
+        tried.add(moments.get(i));
+      } else {
+        found.add(moments.get(i));
+        signs.add(side.sign());
+      }
+    }
+    if (!found.isEmpty()) {
+      tried.add(SurfaceMoments.sum(found, signs));
+    }
+    return MomentClosure.failsForEverySign(tried, MomentClosure.USUAL_SLACK).orElse(false);
   }
 
   private static SurfaceMoments moments(PatchAudit patch) {

@@ -1,5 +1,6 @@
 package org.hullsum.closure;
 
+import java.util.Arrays;
 import java.util.List;
 import java.util.Objects;
 import org.hullsum.numeric.Vector3;
@@ -28,6 +29,37 @@ public record SurfaceMoments(
     if (moments.size() != 9) {
       throw new IllegalArgumentException(moments.size() + " moments, not 9");
     }
+  }
+
+  /**
+   * Several patches as one, each with the sign of its side.
+   *
+   * @param signs +1 or −1 for each patch
+   */
+  public static SurfaceMoments sum(List<SurfaceMoments> patches, List<Integer> signs) {
+    Vector3 reference = patches.get(0).reference;
+    double[] total = new double[12];
+    double area = 0;
+    double vectorError = 0;
+    double momentsError = 0;
+    for (int p = 0; p < patches.size(); p++) {
+      SurfaceMoments patch = patches.get(p);
+      double[] row = patch.about(reference);
+      for (int k = 0; k < total.length; k++) {
+        total[k] += signs.get(p) * row[k];
+      }
+      area += patch.area;
+      vectorError += patch.vectorAreaError;
+      momentsError +=
+          patch.momentsError + patch.reference.minus(reference).norm() * patch.vectorAreaError;
+    }
+    return new SurfaceMoments(
+        area,
+        new Vector3(total[0], total[1], total[2]),
+        vectorError,
+        reference,
+        Arrays.stream(total, 3, total.length).boxed().toList(),
+        momentsError);
   }
 
   /** The vector area and the moments about another point, in a row of 3 + 9 numbers. */

@@ -8,6 +8,9 @@ import org.hullsum.units.Dimension;
 /**
  * A formula as an immutable tree. Numbers in it are in working units; conditions are expressions
  * with value 1 (true) or 0 (false). Equality is by structure.
+ *
+ * <p>Equality is written out, though it is what records have by themselves: theirs is linked at
+ * first use, which costs a short run a good part of its time.
  */
 public sealed interface Expression
     permits Expression.Constant,
@@ -59,6 +62,19 @@ public sealed interface Expression
     }
 
     @Override
+    public boolean equals(Object other) {
+      return other instanceof Constant that
+          && Double.compare(value, that.value) == 0
+          && dimension.equals(that.dimension)
+          && text.equals(that.text);
+    }
+
+    @Override
+    public int hashCode() {
+      return 31 * Double.hashCode(value) + text.hashCode();
+    }
+
+    @Override
     public <R> R accept(Visitor<R> visitor) {
       return visitor.constant(this);
     }
@@ -76,6 +92,16 @@ public sealed interface Expression
     }
 
     @Override
+    public boolean equals(Object other) {
+      return other instanceof Symbol that && name.equals(that.name);
+    }
+
+    @Override
+    public int hashCode() {
+      return name.hashCode();
+    }
+
+    @Override
     public <R> R accept(Visitor<R> visitor) {
       return visitor.symbol(this);
     }
@@ -89,6 +115,16 @@ public sealed interface Expression
   record Negation(Expression operand) implements Expression {
     public Negation {
       Objects.requireNonNull(operand, "operand");
+    }
+
+    @Override
+    public boolean equals(Object other) {
+      return other instanceof Negation that && operand.equals(that.operand);
+    }
+
+    @Override
+    public int hashCode() {
+      return 31 * operand.hashCode() + 1;
     }
 
     @Override
@@ -118,6 +154,19 @@ public sealed interface Expression
     }
 
     @Override
+    public boolean equals(Object other) {
+      return other instanceof Binary that
+          && operator == that.operator
+          && left.equals(that.left)
+          && right.equals(that.right);
+    }
+
+    @Override
+    public int hashCode() {
+      return 31 * (31 * left.hashCode() + right.hashCode()) + operator.name().hashCode();
+    }
+
+    @Override
     public <R> R accept(Visitor<R> visitor) {
       return visitor.binary(this);
     }
@@ -134,6 +183,18 @@ public sealed interface Expression
       Objects.requireNonNull(function, "function");
       arguments = List.copyOf(arguments);
       function.requireArguments(arguments.size());
+    }
+
+    @Override
+    public boolean equals(Object other) {
+      return other instanceof Call that
+          && function == that.function
+          && arguments.equals(that.arguments);
+    }
+
+    @Override
+    public int hashCode() {
+      return 31 * arguments.hashCode() + function.name().hashCode();
     }
 
     @Override
@@ -164,6 +225,19 @@ public sealed interface Expression
     }
 
     @Override
+    public boolean equals(Object other) {
+      return other instanceof Comparison that
+          && relation == that.relation
+          && left.equals(that.left)
+          && right.equals(that.right);
+    }
+
+    @Override
+    public int hashCode() {
+      return 31 * (31 * left.hashCode() + right.hashCode()) + relation.name().hashCode();
+    }
+
+    @Override
     public <R> R accept(Visitor<R> visitor) {
       return visitor.comparison(this);
     }
@@ -188,6 +262,18 @@ public sealed interface Expression
     }
 
     @Override
+    public boolean equals(Object other) {
+      return other instanceof Logical that
+          && connective == that.connective
+          && conditions.equals(that.conditions);
+    }
+
+    @Override
+    public int hashCode() {
+      return 31 * conditions.hashCode() + connective.name().hashCode();
+    }
+
+    @Override
     public <R> R accept(Visitor<R> visitor) {
       return visitor.logical(this);
     }
@@ -205,6 +291,19 @@ public sealed interface Expression
       Objects.requireNonNull(condition, "condition");
       Objects.requireNonNull(then, "then");
       Objects.requireNonNull(otherwise, "otherwise");
+    }
+
+    @Override
+    public boolean equals(Object other) {
+      return other instanceof Conditional that
+          && condition.equals(that.condition)
+          && then.equals(that.then)
+          && otherwise.equals(that.otherwise);
+    }
+
+    @Override
+    public int hashCode() {
+      return 31 * (31 * condition.hashCode() + then.hashCode()) + otherwise.hashCode();
     }
 
     @Override

@@ -68,6 +68,10 @@ record RemovableQuotient(
 
   /** A divisor as v^order times what does not vanish with v as a factor. */
   private record Divisor(int order, Optional<Expression> rest) {
+    private boolean isVariable() {
+      return order == 1 && rest.isEmpty();
+    }
+
     static Divisor of(Expression e, String name) {
       if (e instanceof Symbol symbol && symbol.name().equals(name)) {
         return new Divisor(1, Optional.empty());
@@ -77,7 +81,7 @@ record RemovableQuotient(
         if (exponent.isPresent()
             && exponent.get() >= 1
             && exponent.get() <= HIGHEST_ORDER
-            && of(b.left(), name).equals(new Divisor(1, Optional.empty()))) {
+            && of(b.left(), name).isVariable()) {
           return new Divisor(exponent.get().intValue(), Optional.empty());
         }
       }
