@@ -188,7 +188,7 @@ final class CaseFindings {
       evidence.put("gapArea", area);
       where =
           "; one plane opening of "
-              + Figures.text(area, scales.lengthUnit().equals("1") ? "1" : "m2")
+              + Figures.text(area, scales.areaUnit())
               + " around "
               + scales.place(gap.centre())
               + " would explain it";

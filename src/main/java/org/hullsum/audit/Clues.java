@@ -4,7 +4,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
-import org.hullsum.numeric.Vector3;
 
 /**
  * What geometry and computation have shown, by which explanations are allowed or vetoed.
@@ -44,7 +43,7 @@ record Clues(
   /**
    * The one plane gap that the moments give.
    *
-   * @param centre in SI
+   * @param described its area and place, with units
    * @param area in SI
    * @param between the patches at its rim, where they are known
    * @param flux outward through a plane disk over it
@@ -52,7 +51,7 @@ record Clues(
    * @param slack numerical error of the flux
    */
   record Gap(
-      Vector3 centre,
+      String described,
       double area,
       List<String> between,
       Optional<Double> flux,

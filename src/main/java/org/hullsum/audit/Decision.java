@@ -122,20 +122,18 @@ record Decision(
   private static Decision byTolerance(Evidence evidence, double tolerance) {
     double size = Math.abs(evidence.residual());
     double w = evidence.halfWidth();
-    String against =
+    String found =
         "|residual| "
             + Figures.text(size, evidence.unit())
-            + (w > 0 ? " ± " + Figures.text(w, evidence.unit()) : "")
-            + " against the tolerance "
-            + Figures.text(tolerance, evidence.unit());
+            + (w > 0 ? " ± " + Figures.error(w, evidence.unit()) : "");
+    String limit = " the tolerance " + Figures.text(tolerance, evidence.unit());
     if (size + w <= tolerance) {
-      return decided(evidence, Verdict.BALANCED, tolerance, against + ": within it for certain");
+      return decided(evidence, Verdict.BALANCED, tolerance, found + " is within" + limit);
     }
     if (size - w > tolerance) {
-      return decided(evidence, Verdict.IMBALANCED, tolerance, against + ": beyond it for certain");
+      return decided(evidence, Verdict.IMBALANCED, tolerance, found + " is beyond" + limit);
     }
-    return decided(
-        evidence, Verdict.UNDECIDED, tolerance, against + ": the tolerance lies inside the band");
+    return decided(evidence, Verdict.UNDECIDED, tolerance, found + " straddles" + limit);
   }
 
   private static Decision decided(

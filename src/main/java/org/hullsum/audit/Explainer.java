@@ -85,11 +85,9 @@ final class Explainer {
                     Optional.of(g.area()),
                     g.residualThen().get(),
                     g.slack(),
-                    "The surface has an opening of area "
-                        + Figures.text(g.area())
-                        + " around "
-                        + Figures.point(g.centre())
-                        + ", by its moments; a plane patch over it would carry "
+                    "By its moments the surface has an opening of "
+                        + g.described()
+                        + "; a plane patch over it would carry "
                         + Figures.text(g.flux().orElse(0.0), balance.result().unit())
                         + " outward."));
   }

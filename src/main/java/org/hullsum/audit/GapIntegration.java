@@ -74,9 +74,10 @@ final class GapIntegration {
               ? balance.result().outward().map(o -> o + flux.value() - made.value())
               : balance.residual().map(r -> r.value() + flux.value());
       double slack = flux.error() + (identity ? made.error() : 0);
+      double area = scales.area(gap.vectorArea().norm());
       return new Clues.Gap(
-          scales.point(gap.centre()),
-          scales.area(gap.vectorArea().norm()),
+          Figures.text(area, scales.areaUnit()) + " around " + scales.place(gap.centre()),
+          area,
           List.of(),
           Optional.of(flux.value()),
           then,

@@ -60,9 +60,8 @@ final class PatchHypotheses {
         (patches.size() == 1
                 ? "`" + names + "` faces the wrong way, by where its sides lie"
                 : "`" + names + "` face the wrong way, by where their sides lie")
-            + "; turned, the residual would be "
-            + Figures.text(residual + change, unit)
-            + ".");
+            + "; turned, "
+            + outcome(residual + change));
   }
 
   private Hypothesis reversed(PatchRate rate, double outward) {
@@ -74,11 +73,7 @@ final class PatchHypotheses {
         Optional.of(-1.0),
         then,
         0,
-        "If what is metered at `"
-            + rate.patch()
-            + "` ran the other way, the residual would be "
-            + Figures.text(then, unit)
-            + ".");
+        "If what is metered at `" + rate.patch() + "` ran the other way, " + outcome(then));
   }
 
   private Optional<Hypothesis> countedTwice(PatchRate rate, double outward) {
@@ -102,9 +97,8 @@ final class PatchHypotheses {
                 + rate.patch()
                 + "` is counted twice"
                 + evidence
-                + ", the residual without it would be "
-                + Figures.text(then, unit)
-                + "."));
+                + ", then without it "
+                + outcome(then)));
   }
 
   /**
@@ -142,8 +136,14 @@ final class PatchHypotheses {
                 + (leavesOutside ? "leaves " : "enters ")
                 + "`"
                 + balance.subject().name()
-                + "` instead of the surroundings, the residual would be "
-                + Figures.text(then, unit)
-                + "."));
+                + "` instead of the surroundings, "
+                + outcome(then)));
+  }
+
+  /** What is left of the residual then; what is within w is nothing. */
+  private String outcome(double then) {
+    return Math.abs(then) <= balance.halfWidth()
+        ? "the residual would vanish."
+        : "the residual would be " + Figures.text(then, unit) + ".";
   }
 }

@@ -42,6 +42,11 @@ record Scales(double rate, double length, double time, String rateUnit, String l
     return vector.times(length * length);
   }
 
+  /** The unit of areas in sentences. */
+  String areaUnit() {
+    return lengthUnit.equals("1") ? "1" : lengthUnit + "2";
+  }
+
   /** A point in a sentence, in SI. */
   String place(Vector3 point) {
     return Figures.point(point(point)) + (lengthUnit.equals("1") ? "" : " " + lengthUnit);

@@ -15,7 +15,6 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import org.hullsum.audit.Explanation.Kind;
-import org.hullsum.numeric.Vector3;
 import org.junit.jupiter.api.Test;
 
 class ExplainerTest {
@@ -183,7 +182,7 @@ class ExplainerTest {
             Map.of(
                 "tank",
                 new Clues.Gap(
-                    new Vector3(1, 2, 3),
+                    "0.25 m2 around (1, 2, 3) m",
                     0.25,
                     List.of("out"),
                     Optional.of(2.0),

@@ -122,6 +122,7 @@ class ShippedCasesTest {
         "basin-and-sump",
         "all-flux-boundary",
         "mass-from-nothing",
+        "branch-on-shell",
         "duct-claim",
         "dosing-annulus"
       })
