@@ -119,11 +119,7 @@ public final class DimensionCheck implements Expression.Visitor<Optional<Dimensi
   }
 
   private static Optional<Double> number(Expression e) {
-    return Symbols.in(e).isEmpty()
-            && Simplifier.simplify(e) instanceof Constant constant
-            && Double.isFinite(constant.value())
-        ? Optional.of(constant.value())
-        : Optional.empty();
+    return TapeBuilder.constant(e).filter(Double::isFinite);
   }
 
   private Optional<Dimension> scaled(Expression whole, Dimension base, double exponent) {

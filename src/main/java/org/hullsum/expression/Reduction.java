@@ -5,7 +5,6 @@ import java.util.IdentityHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.Set;
 import org.hullsum.expression.Expression.Binary;
 import org.hullsum.expression.Expression.Call;
 import org.hullsum.expression.Expression.Comparison;
@@ -139,8 +138,7 @@ final class Reduction implements Expression.Visitor<Polynomial> {
    * in other comparisons nothing may be changed.
    */
   private static boolean isTotal(Expression e) {
-    Set<Expression> parts = Symbols.parts(e);
-    return parts.stream().allMatch(Reduction::hasValueWhereItsPartsHave);
+    return Symbols.parts(e).stream().allMatch(Reduction::hasValueWhereItsPartsHave);
   }
 
   private static boolean hasValueWhereItsPartsHave(Expression e) {

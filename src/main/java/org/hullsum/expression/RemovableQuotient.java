@@ -12,7 +12,8 @@ import org.hullsum.expression.Expression.Symbol;
  * sin(r)/r}: its singularity at v = 0 is removable.
  *
  * <p>By Taylor's theorem with the remainder of Lagrange, N/v^n = N⁽ⁿ⁾(ξ)/n! for a ξ between 0 and
- * v, so over an interval of v that contains 0 the n-th derivative encloses it.
+ * v, so over an interval of v that contains 0 the n-th derivative encloses it. All lower ones must
+ * be continuous; the n-th may jump, since its enclosure has the values on both sides.
  *
  * @param meanValue the n-th derivative of N by v, divided by n!
  * @param rest the other factors of the divisor, if any
@@ -43,15 +44,12 @@ record RemovableQuotient(
 
   private static Optional<RemovableQuotient> in(
       Expression numerator, String name, Divisor divisor) {
-    if (!Switches.jumps(numerator).isEmpty()) {
-      return Optional.empty();
-    }
     Expression derivative = numerator;
     double factorial = 1;
     for (int k = 1; k <= divisor.order(); k++) {
       Expression atZero =
           Simplifier.simplify(Substitution.replace(derivative, Map.of(name, Algebra.ZERO)));
-      if (!Algebra.isZero(atZero)) {
+      if (!Algebra.isZero(atZero) || !Switches.jumps(derivative).isEmpty()) {
         return Optional.empty();
       }
       derivative = Derivative.of(derivative, name);

@@ -29,12 +29,16 @@ abstract class Rewriting implements Expression.Visitor<Expression> {
     return known;
   }
 
+  /** The same list where nothing in it changes. */
   final List<Expression> rewriteAll(List<Expression> list) {
     List<Expression> rewritten = new ArrayList<>(list.size());
+    boolean changed = false;
     for (Expression e : list) {
-      rewritten.add(rewrite(e));
+      Expression other = rewrite(e);
+      rewritten.add(other);
+      changed |= other != e;
     }
-    return rewritten;
+    return changed ? rewritten : list;
   }
 
   @Override
@@ -64,25 +68,36 @@ abstract class Rewriting implements Expression.Visitor<Expression> {
 
   @Override
   public Expression call(Call call) {
-    return new Call(call.function(), rewriteAll(call.arguments()));
+    List<Expression> arguments = rewriteAll(call.arguments());
+    return arguments == call.arguments() ? call : new Call(call.function(), arguments);
   }
 
   @Override
   public Expression comparison(Comparison comparison) {
-    return new Comparison(
-        comparison.relation(), rewrite(comparison.left()), rewrite(comparison.right()));
+    Expression left = rewrite(comparison.left());
+    Expression right = rewrite(comparison.right());
+    return left == comparison.left() && right == comparison.right()
+        ? comparison
+        : new Comparison(comparison.relation(), left, right);
   }
 
   @Override
   public Expression logical(Logical logical) {
-    return new Logical(logical.connective(), rewriteAll(logical.conditions()));
+    List<Expression> conditions = rewriteAll(logical.conditions());
+    return conditions == logical.conditions()
+        ? logical
+        : new Logical(logical.connective(), conditions);
   }
 
   @Override
   public Expression conditional(Conditional conditional) {
-    return new Conditional(
-        rewrite(conditional.condition()),
-        rewrite(conditional.then()),
-        rewrite(conditional.otherwise()));
+    Expression condition = rewrite(conditional.condition());
+    Expression then = rewrite(conditional.then());
+    Expression otherwise = rewrite(conditional.otherwise());
+    return condition == conditional.condition()
+            && then == conditional.then()
+            && otherwise == conditional.otherwise()
+        ? conditional
+        : new Conditional(condition, then, otherwise);
   }
 }

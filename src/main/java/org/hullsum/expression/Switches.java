@@ -4,13 +4,15 @@ import java.util.ArrayList;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Set;
+import org.hullsum.expression.Expression.Binary;
 import org.hullsum.expression.Expression.Call;
 import org.hullsum.expression.Expression.Comparison;
+import org.hullsum.expression.Expression.Operator;
 
 /**
  * The functions on whose zero sets an expression has a kink or a jump: the arguments of {@code abs}
- * and {@code sign}, the differences of any two arguments of {@code min} and {@code max}, and left
- * less right side of each comparison.
+ * and {@code sign} (also where it is written as the root of a square), the differences of any two
+ * arguments of {@code min} and {@code max}, and left less right side of each comparison.
  *
  * <p>Between these curves the expression is as smooth as its smooth functions are. The curves where
  * the result itself is not smooth are among those given; not all need be (the other branch may
@@ -23,8 +25,20 @@ public final class Switches {
   public static List<Expression> of(Expression e) {
     Set<Expression> switches = new LinkedHashSet<>();
     collectKinks(e, switches);
+    if (Symbols.parts(e).stream().anyMatch(Switches::mayHideKink)) {
+      collectKinks(Simplifier.simplify(e), switches);
+    }
     collectJumps(e, switches);
     return List.copyOf(switches);
+  }
+
+  /** A root of a square is a magnitude, which the simplifier brings to light. */
+  private static boolean mayHideKink(Expression e) {
+    if (e instanceof Binary b && b.operator() == Operator.POWER) {
+      return Algebra.plain(b.right()).filter(v -> v == Math.rint(v)).isEmpty();
+    }
+    return e instanceof Call call
+        && (call.function() == Function.SQRT || call.function() == Function.HYPOT);
   }
 
   /** Those at which the value itself may jump: arguments of {@code sign} and comparisons. */

@@ -72,6 +72,15 @@ final class TapeBuilder implements Expression.Visitor<Integer> {
     return pruned(places);
   }
 
+  /** The value of an expression without symbols; empty where it has some. */
+  static Optional<Double> constant(Expression e) {
+    if (!Symbols.in(e).isEmpty()) {
+      return Optional.empty();
+    }
+    Tape tape = new TapeBuilder(List.of(), Map.of(), Purpose.POINTS).build(List.of(e));
+    return Optional.of(tape.instructions().get(tape.outputs().get(0)).value());
+  }
+
   private int of(Expression e) {
     Integer place = done.get(e);
     if (place == null) {

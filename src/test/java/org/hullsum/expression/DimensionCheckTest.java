@@ -36,6 +36,8 @@ class DimensionCheckTest {
     "x^2, m2",
     "x^(1/2), m^6/12",
     "cbrt(x^3), m",
+    "(x^3)^(1/3), m",
+    "x^-(3 - 1), m-2",
     "'if(x < y, x, 2)', m",
     "x + 3, m",
     "x*(4 1/s), m.s-1",

@@ -237,6 +237,20 @@ class IntervalEvaluatorTest {
   }
 
   @Test
+  void magnitudeOverASquareIsNotRemovable() {
+    IntervalEvaluator evaluator = compiled(read("abs(x)/x^2"));
+    IntervalEvaluator.Workspace workspace = over(evaluator, -1, 1);
+    assertTrue(evaluator.mayBeUndefined(0, workspace));
+  }
+
+  @Test
+  void magnitudeOverItsVariableIsEnclosedByItsSlopes() {
+    IntervalEvaluator.Workspace workspace = over(compiled(read("abs(x)/x")), -1, 1);
+    assertEquals(-1, workspace.low(0));
+    assertEquals(1, workspace.high(0));
+  }
+
+  @Test
   void divisorThatOnlyTouchesZeroGivesAHalfLine() {
     IntervalEvaluator.Workspace workspace = over(compiled(read("1/x")), 0, 2);
     assertEquals(0.5, workspace.low(0), 1e-15);
