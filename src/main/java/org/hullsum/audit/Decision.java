@@ -113,10 +113,14 @@ record Decision(
       return Math.max(
           stated.absolute().orElse(0), stated.relative().orElse(0) * evidence.throughput());
     }
-    return evidence.check() == BalanceResult.Check.IDENTITY
-        ? Math.max(
-            IDENTITY_RELATIVE * evidence.throughput(), IDENTITY_ERRORS * evidence.numericalError())
-        : USUAL_RELATIVE * evidence.throughput();
+    double usual = USUAL_RELATIVE * evidence.throughput();
+    if (evidence.check() == BalanceResult.Check.CONSERVATION) {
+      return usual;
+    }
+    // An integral far off its accuracy must not buy itself a verdict.
+    double errors = IDENTITY_ERRORS * evidence.numericalError();
+    double allowed = evidence.nothingFlows() ? errors : Math.min(errors, usual);
+    return Math.max(IDENTITY_RELATIVE * evidence.throughput(), allowed);
   }
 
   private static Decision byTolerance(Evidence evidence, double tolerance) {

@@ -150,4 +150,10 @@ class DecisionTest {
     assertEquals(Verdict.IMBALANCED, rejected.verdict());
     assertEquals(0.02275, rejected.probabilityWrong().orElseThrow(), 1e-5);
   }
+
+  @Test
+  void identityOfAnIntegralFarOffItsAccuracyIsUndecided() {
+    Decision decision = decide(0.5, 120, 0, 370, Check.IDENTITY, tolerances(-1, -1));
+    assertEquals(Verdict.UNDECIDED, decision.verdict());
+  }
 }
