@@ -149,10 +149,7 @@ final class BalanceBuilder {
     parts.addAll(outwardParts);
     interiorParts.forEach(p -> parts.add(p.times(-1)));
     UncertaintyBudget budget = UncertaintyBudget.of(parts, inputs);
-    Coverage coverage =
-        new Coverage(
-            subject.tolerances().coverage(),
-            budget.degreesOfFreedom().orElse(Double.POSITIVE_INFINITY));
+    Coverage coverage = new Coverage(subject.tolerances().coverage(), budget.degreesOfFreedom());
     Optional<Estimate> residual =
         outward.isPresent() && interior.isPresent() && subject.unbounded().isEmpty()
             ? Optional.of(difference(outward.get(), interior.get()))
@@ -255,9 +252,8 @@ final class BalanceBuilder {
     if (integrated && subject.open().isPresent()) {
       return Conclusion.undecided(subject.open().get());
     }
-    if (budget.degreesOfFreedom().isEmpty()) {
-      return Conclusion.undecided(
-          "figures with finite degrees of freedom are correlated, so no coverage factor follows");
+    if (budget.refusal().isPresent()) {
+      return Conclusion.undecided(budget.refusal().get());
     }
     Decision reached = decision.orElseThrow();
     return new Conclusion(

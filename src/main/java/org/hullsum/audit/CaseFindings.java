@@ -38,13 +38,18 @@ final class CaseFindings {
   }
 
   void addAll(List<Finding> others) {
-    others.forEach(this::add);
+    findings.addAll(others);
   }
 
-  /** Each code once on each name: the first stands. */
+  /** Each code once on each name and place: of several instants the first stands. */
   private void add(Finding finding) {
     boolean said =
-        findings.stream().anyMatch(f -> f.code() == finding.code() && f.on().equals(finding.on()));
+        findings.stream()
+            .anyMatch(
+                f ->
+                    f.code() == finding.code()
+                        && f.on().equals(finding.on())
+                        && f.place().equals(finding.place()));
     if (!said) {
       findings.add(finding);
     }
@@ -70,8 +75,16 @@ final class CaseFindings {
     audit.fluxes().forEach(now -> now.forEach(flux -> addFlux(audit, flux, digits)));
   }
 
+  private boolean has(FindingCode code, String on) {
+    return findings.stream()
+        .anyMatch(f -> f.code() == code && f.on().filter(on::equals).isPresent());
+  }
+
   private void addFlux(PatchAudit audit, PatchFlux flux, int digits) {
     Patch patch = audit.patch();
+    if (flux.nonFiniteAt().isPresent() && has(FindingCode.FIELD_SINGULAR, patch.name())) {
+      return;
+    }
     if (flux.nonFiniteAt().isPresent()) {
       Vector3 at = flux.nonFiniteAt().get();
       add(
@@ -90,7 +103,7 @@ final class CaseFindings {
           patch.name(),
           patch.place(),
           digits,
-          flux.errorBound() / flux.magnitude());
+          flux.magnitude() > 0 ? flux.errorBound() / flux.magnitude() : 1);
     }
   }
 
@@ -214,6 +227,20 @@ final class CaseFindings {
   }
 
   void addInterior(InteriorAudit interior, Volume volume, int digits) {
+    interior.terms().get(0).stream()
+        .flatMap(term -> term.missing().stream())
+        .findFirst()
+        .filter(reason -> interior.faults().isEmpty() && !isExplained(volume))
+        .ifPresent(
+            reason ->
+                add(
+                    Finding.of(
+                            FindingCode.SURFACE_OPEN,
+                            reason,
+                            volume.name(),
+                            Optional.of(volume.place()),
+                            Map.of())
+                        .weighing(Severity.WARNING)));
     for (InteriorAudit.Fault fault : interior.faults()) {
       if (fault.nonFiniteAt().isPresent()) {
         Vector3 at = fault.nonFiniteAt().get();
@@ -238,6 +265,14 @@ final class CaseFindings {
             fault.reached());
       }
     }
+  }
+
+  /** Whether a finding already says why nothing could be integrated over a volume. */
+  private boolean isExplained(Volume volume) {
+    return has(FindingCode.SURFACE_OPEN, volume.name())
+        || has(FindingCode.VOLUME_UNBOUNDED, volume.name())
+        || has(FindingCode.FIELD_SINGULAR, volume.name())
+        || findings.stream().anyMatch(f -> f.code() == FindingCode.SURFACE_OVERLAP);
   }
 
   /** Notes and warnings on one volume's or envelope's balances. */

@@ -45,10 +45,7 @@ final class ClaimJudge {
     Estimate difference = compared.flux().minus(claim);
     UncertaintyBudget budget =
         UncertaintyBudget.of(List.of(compared.flux(), claim.times(-1)), inputs);
-    Coverage coverage =
-        new Coverage(
-            compared.tolerances().coverage(),
-            budget.degreesOfFreedom().orElse(Double.POSITIVE_INFINITY));
+    Coverage coverage = new Coverage(compared.tolerances().coverage(), budget.degreesOfFreedom());
     double w = difference.error() + coverage.factor() * budget.standardUncertainty();
     boolean uncertain = UncertaintyBudget.of(List.of(claim), inputs).standardUncertainty() > 0;
     double relative = compared.tolerances().relative().orElse(Decision.USUAL_RELATIVE);

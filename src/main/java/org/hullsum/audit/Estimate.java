@@ -23,6 +23,8 @@ record Estimate(double value, double error, Map<String, Double> sensitivities) {
     if (!(error >= 0)) {
       throw new IllegalArgumentException("error bound " + error);
     }
+    // A negative zero would be printed.
+    value += 0.0;
     sensitivities = Collections.unmodifiableMap(new TreeMap<>(sensitivities));
   }
 

@@ -187,7 +187,8 @@ final class InteriorIntegration {
       boolean sensible = integral.sensitivities().values().stream().allMatch(Double::isFinite);
       boolean reached = integral.status() == Integral.Status.REACHED;
       if (!reached) {
-        double relative = integral.errorBound() / integral.magnitude();
+        double relative =
+            integral.magnitude() > 0 ? integral.errorBound() / integral.magnitude() : 1;
         faults.add(new InteriorAudit.Fault(formula, integral.nonFiniteAt(), relative));
       }
       Optional<Estimate> estimate =

@@ -39,7 +39,9 @@ record Scales(double rate, double length, double time, String rateUnit, String l
   }
 
   Vector3 vectorArea(Vector3 vector) {
-    return vector.times(length * length);
+    Vector3 scaled = vector.times(length * length);
+    // A negative zero would be printed.
+    return scaled.plus(Vector3.ZERO);
   }
 
   /** The unit of areas in sentences. */

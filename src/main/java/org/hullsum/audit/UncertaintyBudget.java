@@ -5,7 +5,7 @@ import java.util.Comparator;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
-import java.util.OptionalDouble;
+import java.util.Optional;
 import java.util.TreeMap;
 import org.apache.commons.numbers.core.Sum;
 import org.hullsum.model.Input;
@@ -22,21 +22,28 @@ import org.hullsum.model.Inputs;
  *
  * <p>The effective degrees of freedom are those of Welch and Satterthwaite, which hold for
  * independent sources only; where a source with finite degrees of freedom is correlated with
- * another that matters they are empty, and no coverage factor follows.
+ * another that matters no coverage factor follows, and {@link #refusal} says so; so it does where
+ * the correlations contradict one another and u² would be negative.
  */
 final class UncertaintyBudget {
-  private static final double CANCELLED = 1e-6;
+  /** Of u² relative to the sum of the squares. */
+  private static final double ROUNDING = 1e-12;
+
+  private static final double CANCELLED = 1e-5;
 
   private final double standardUncertainty;
-  private final OptionalDouble degreesOfFreedom;
+  private final double degreesOfFreedom;
+  private final Optional<String> refusal;
   private final List<BalanceResult.Contribution> contributions;
 
   private UncertaintyBudget(
       double standardUncertainty,
-      OptionalDouble degreesOfFreedom,
+      double degreesOfFreedom,
+      Optional<String> refusal,
       List<BalanceResult.Contribution> contributions) {
     this.standardUncertainty = standardUncertainty;
     this.degreesOfFreedom = degreesOfFreedom;
+    this.refusal = refusal;
     this.contributions = List.copyOf(contributions);
   }
 
@@ -83,7 +90,9 @@ final class UncertaintyBudget {
     }
     Sum total = Sum.create();
     variance.values().forEach(total::add);
-    double square = Math.max(0, total.getAsDouble());
+    double gross = moved.values().stream().mapToDouble(m -> m * m).sum();
+    boolean contradictory = total.getAsDouble() < -ROUNDING * gross;
+    double square = contradictory ? gross : Math.max(0, total.getAsDouble());
     List<BalanceResult.Contribution> contributions = new ArrayList<>();
     moved.forEach(
         (name, m) ->
@@ -94,11 +103,20 @@ final class UncertaintyBudget {
         Comparator.comparingDouble(BalanceResult.Contribution::contribution)
             .reversed()
             .thenComparing(BalanceResult.Contribution::source));
-    OptionalDouble freedom =
-        correlatedFinite
-            ? OptionalDouble.empty()
-            : OptionalDouble.of(welchSatterthwaite(moved, square, inputs));
-    return new UncertaintyBudget(Math.sqrt(square), freedom, contributions);
+    double freedom =
+        correlatedFinite ? Double.POSITIVE_INFINITY : welchSatterthwaite(moved, square, inputs);
+    return new UncertaintyBudget(
+        Math.sqrt(square), freedom, refusal(correlatedFinite, contradictory), contributions);
+  }
+
+  private static Optional<String> refusal(boolean correlatedFinite, boolean contradictory) {
+    if (contradictory) {
+      return Optional.of("the stated correlations contradict one another");
+    }
+    return correlatedFinite
+        ? Optional.of(
+            "figures with finite degrees of freedom are correlated, so no coverage factor follows")
+        : Optional.empty();
   }
 
   private static boolean finite(Inputs inputs, String name) {
@@ -124,9 +142,14 @@ final class UncertaintyBudget {
     return standardUncertainty;
   }
 
-  /** Effective degrees of freedom; empty where finite ones meet correlation. */
-  OptionalDouble degreesOfFreedom() {
+  /** Effective degrees of freedom, perhaps infinite. */
+  double degreesOfFreedom() {
     return degreesOfFreedom;
+  }
+
+  /** Why no coverage factor follows. */
+  Optional<String> refusal() {
+    return refusal;
   }
 
   /** Every source that matters, the largest first. */

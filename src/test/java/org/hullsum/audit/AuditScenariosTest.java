@@ -242,6 +242,7 @@ class AuditScenariosTest {
             .audit();
     assertEquals(Verdict.UNDECIDED, only(result).verdict());
     assertTrue(only(result).interior().isEmpty());
+    assertTrue(finding(result, FindingCode.SURFACE_OPEN, "box").isPresent());
   }
 
   @Test
@@ -375,5 +376,63 @@ class AuditScenariosTest {
     assertEquals(-10, balance.residual().orElseThrow(), 1e-9);
     assertEquals(0.1, balance.standardUncertainty(), 1e-9);
     assertEquals("rho", balance.budget().get(0).source());
+  }
+
+  @Test
+  void patchesThatBoundNothingAreReportedWithoutVerdict() {
+    CaseResult result =
+        audit(
+            """
+            format: hullsum-case/1
+            units: none
+            volumes: none
+            fields: {flow: {vector: ["0", "0", "2"]}}
+            patches:
+              plate:
+                surface: {rectangle: {corner: [0, 0, 0], edges: [[1, 0, 0], [0, 1, 0]]}}
+                flux: {field: flow}
+            """);
+    assertEquals(Optional.empty(), result.verdict());
+    assertEquals(2, result.patches().get(0).fluxes().get(0).value().orElseThrow(), 1e-9);
+    assertEquals(Optional.empty(), result.patches().get(0).foundFacing());
+  }
+
+  @Test
+  void twoMissedClaimsOfOnePatchAreTwoFindings() {
+    CaseResult result =
+        new BoxCase()
+            .flux("none")
+            .interior("")
+            .patch("lid", "    flux: {metered: 3}\n    claim: [4, 5]\n")
+            .audit();
+    assertEquals(
+        2, result.findings().stream().filter(f -> f.code() == FindingCode.CLAIM_MISSED).count());
+  }
+
+  /** The radius moves both sides alike, so the identity is as certain as without it. */
+  @Test
+  void uncertainGeometryCancelsInTheIdentity() {
+    CaseResult result =
+        audit(
+            """
+            format: hullsum-case/1
+            units: none
+            parameters: {radius: 2 ± 0.1 (k=2)}
+            fields: {flow: {vector: ["x", "sin(y)", "z^2"]}}
+            volumes: {can: {interior: {divergence-of: flow}}}
+            patches:
+              wall:
+                surface: {cylinder: {from: [0, 0, 0], to: [0, 0, 1], radius: radius}}
+                flux: {field: flow}
+              floor:
+                surface: {disk: {centre: [0, 0, 0], normal: [0, 0, -1], radius: radius}}
+                flux: {field: flow}
+              lid:
+                surface: {disk: {centre: [0, 0, 1], normal: [0, 0, 1], radius: radius}}
+                flux: {field: flow}
+            """);
+    assertEquals(0, only(result).standardUncertainty());
+    assertEquals(Verdict.BALANCED, only(result).verdict());
+    assertTrue(only(result).lines().get(0).standardUncertainty() > 0);
   }
 }

@@ -83,7 +83,7 @@ class UncertaintyBudgetTest {
     UncertaintyBudget budget =
         UncertaintyBudget.of(List.of(moved(Map.of("x", 1.0, "y", 1.0, "z", 1.0))), inputs);
     assertEquals(1.03, budget.standardUncertainty(), 0.005);
-    double freedom = budget.degreesOfFreedom().orElseThrow();
+    double freedom = budget.degreesOfFreedom();
     assertEquals(19.0, freedom, 0.05);
     double k = new Coverage(0.95, freedom).factor();
     assertEquals(2.09, k, 0.005);
@@ -99,14 +99,28 @@ class UncertaintyBudgetTest {
             input("b", 4, Double.POSITIVE_INFINITY));
     assertTrue(
         UncertaintyBudget.of(List.of(moved(Map.of("a", 1.0, "b", 1.0))), inputs)
-            .degreesOfFreedom()
-            .isEmpty());
-    assertEquals(
-        9,
-        UncertaintyBudget.of(List.of(moved(Map.of("a", 1.0))), inputs)
-            .degreesOfFreedom()
-            .orElseThrow(),
-        1e-12);
+            .refusal()
+            .isPresent());
+    UncertaintyBudget alone = UncertaintyBudget.of(List.of(moved(Map.of("a", 1.0))), inputs);
+    assertTrue(alone.refusal().isEmpty());
+    assertEquals(9, alone.degreesOfFreedom(), 1e-12);
+  }
+
+  @Test
+  void correlationsThatContradictOneAnotherAreRefused() {
+    Inputs inputs =
+        inputs(
+            List.of(
+                new Inputs.Correlation("a", "b", -1),
+                new Inputs.Correlation("b", "c", -1),
+                new Inputs.Correlation("a", "c", -1)),
+            input("a", 1, Double.POSITIVE_INFINITY),
+            input("b", 1, Double.POSITIVE_INFINITY),
+            input("c", 1, Double.POSITIVE_INFINITY));
+    UncertaintyBudget budget =
+        UncertaintyBudget.of(List.of(moved(Map.of("a", 1.0, "b", 1.0, "c", 1.0))), inputs);
+    assertTrue(budget.refusal().isPresent());
+    assertTrue(budget.standardUncertainty() > 0);
   }
 
   /** NIST Technical Note 1297 (1994), Table B.1; the last row is the normal distribution's. */
