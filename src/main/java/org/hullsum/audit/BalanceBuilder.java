@@ -154,20 +154,7 @@ final class BalanceBuilder {
         outward.isPresent() && interior.isPresent() && subject.unbounded().isEmpty()
             ? Optional.of(difference(outward.get(), interior.get()))
             : Optional.empty();
-    Optional<Decision> decision =
-        residual.map(
-            r ->
-                Decision.of(
-                    new Decision.Evidence(
-                        r.value(),
-                        r.error(),
-                        accurate,
-                        budget.standardUncertainty(),
-                        coverage,
-                        magnitudes / 2,
-                        subject.check(),
-                        subject.tolerances(),
-                        unit)));
+    Optional<Decision> decision = residual.map(r -> decide(r, budget, coverage));
     Conclusion conclusion = conclude(decision, budget);
     BalanceResult result =
         new BalanceResult(
@@ -198,6 +185,20 @@ final class BalanceBuilder {
             conclusion.verdict(),
             sentence(conclusion.reason()));
     return new Balance(subject, rates, residual, decision, result);
+  }
+
+  private Decision decide(Estimate residual, UncertaintyBudget budget, Coverage coverage) {
+    return Decision.of(
+        new Decision.Evidence(
+            residual.value(),
+            residual.error(),
+            accurate,
+            budget.standardUncertainty(),
+            coverage,
+            magnitudes / 2,
+            subject.check(),
+            subject.tolerances(),
+            unit));
   }
 
   private static String sentence(String reason) {

@@ -49,9 +49,7 @@ final class CaseBuilder {
     Rates rates = Rates.of(quantity, !working.none());
     FieldReader fields = new FieldReader(formulas);
     top.get("fields").ifPresent(fields::readAll);
-    TolerancesReader plain = new TolerancesReader(formulas, rates.dimension(), Tolerances.NONE);
-    Tolerances usual = plain.read(top.get("tolerances"));
-    TolerancesReader tolerances = new TolerancesReader(formulas, rates.dimension(), usual);
+    TolerancesReader tolerances = tolerances(top, formulas, rates);
     VolumeReader volumeReader = new VolumeReader(values);
     volumeReader.declare(top.get("volumes"));
     List<Volume> volumes =
@@ -73,10 +71,7 @@ final class CaseBuilder {
     Set<String> names = new LinkedHashSet<>(patchReader.names());
     names.addAll(volumeReader.names());
     names.addAll(volumeReader.envelopeNames());
-    names.addAll(fields.places().keySet());
-    names.addAll(scope.dimensions().keySet());
-    List<Waiver> waivers =
-        top.get("waivers").map(new WaiverReader(values, names)::read).orElse(List.of());
+    List<Waiver> waivers = waivers(top, names, fields, scope);
     Optional<String> title = top.get("title").flatMap(v -> values.freeText(v, "`title`"));
     Optional<String> about = top.get("about").flatMap(v -> values.freeText(v, "`about`"));
     if (problems.fatalCount() > 0 || quantity.isEmpty()) {
@@ -101,6 +96,21 @@ final class CaseBuilder {
             scope.notes(),
             List.of(new Case.SourceFile(options.name(), content.sha256())),
             scope.usedNames()));
+  }
+
+  /** Reads tolerances whose defaults are those of the case. */
+  private static TolerancesReader tolerances(MapReader top, FormulaReader formulas, Rates rates) {
+    TolerancesReader plain = new TolerancesReader(formulas, rates.dimension(), Tolerances.NONE);
+    Tolerances usual = plain.read(top.get("tolerances"));
+    return new TolerancesReader(formulas, rates.dimension(), usual);
+  }
+
+  private List<Waiver> waivers(
+      MapReader top, Set<String> names, FieldReader fields, CaseScope scope) {
+    Set<String> all = new LinkedHashSet<>(names);
+    all.addAll(fields.places().keySet());
+    all.addAll(scope.dimensions().keySet());
+    return top.get("waivers").map(new WaiverReader(values, all)::read).orElse(List.of());
   }
 
   private void checkFormat(MapReader top) {
