@@ -7,6 +7,7 @@ import java.util.Map;
 import java.util.Optional;
 import org.hullsum.expression.Atom.Kind;
 import org.hullsum.expression.Expression.Binary;
+import org.hullsum.expression.Expression.Conditional;
 import org.hullsum.expression.Expression.Constant;
 import org.hullsum.expression.Expression.Operator;
 
@@ -17,7 +18,11 @@ import org.hullsum.expression.Expression.Operator;
 final class AtomTable {
   private final List<Atom> atoms = new ArrayList<>();
   private final Map<Object, Atom> known = new HashMap<>();
+  private final Map<Integer, Branches> conditionals = new HashMap<>();
   private final Assembly assembly = new Assembly(this);
+
+  /** The parts of a conditional. */
+  record Branches(Polynomial condition, Polynomial then, Polynomial otherwise) {}
 
   /** What tells atoms apart. */
   private static List<Object> key(Object head, List<?> parts) {
@@ -98,9 +103,28 @@ final class AtomTable {
         true);
   }
 
-  /** A comparison, a logical connective or a conditional of simplified parts. */
+  /** A comparison or a logical connective of simplified parts. */
   Atom structure(Object head, List<Object> parts, Expression written) {
     return intern(key(head, parts), Kind.PLAIN, written, Polynomial.ZERO, false);
+  }
+
+  /** A conditional whose condition is not decided. */
+  Atom conditional(Branches branches) {
+    Atom atom =
+        structure(
+            Conditional.class,
+            List.of(branches.condition(), branches.then(), branches.otherwise()),
+            new Conditional(
+                assembly.expression(branches.condition()),
+                assembly.expression(branches.then()),
+                assembly.expression(branches.otherwise())));
+    conditionals.put(atom.number(), branches);
+    return atom;
+  }
+
+  /** The parts of an atom that is a conditional. */
+  Optional<Branches> branches(int atom) {
+    return Optional.ofNullable(conditionals.get(atom));
   }
 
   private static Kind kind(Function function) {

@@ -119,7 +119,7 @@ public sealed interface Expression
 
     @Override
     public boolean equals(Object other) {
-      return other instanceof Negation that && operand.equals(that.operand);
+      return this == other || other instanceof Negation that && operand.equals(that.operand);
     }
 
     @Override
@@ -155,10 +155,11 @@ public sealed interface Expression
 
     @Override
     public boolean equals(Object other) {
-      return other instanceof Binary that
-          && operator == that.operator
-          && left.equals(that.left)
-          && right.equals(that.right);
+      return this == other
+          || other instanceof Binary that
+              && operator == that.operator
+              && left.equals(that.left)
+              && right.equals(that.right);
     }
 
     @Override
@@ -187,9 +188,10 @@ public sealed interface Expression
 
     @Override
     public boolean equals(Object other) {
-      return other instanceof Call that
-          && function == that.function
-          && arguments.equals(that.arguments);
+      return this == other
+          || other instanceof Call that
+              && function == that.function
+              && arguments.equals(that.arguments);
     }
 
     @Override
@@ -226,10 +228,11 @@ public sealed interface Expression
 
     @Override
     public boolean equals(Object other) {
-      return other instanceof Comparison that
-          && relation == that.relation
-          && left.equals(that.left)
-          && right.equals(that.right);
+      return this == other
+          || other instanceof Comparison that
+              && relation == that.relation
+              && left.equals(that.left)
+              && right.equals(that.right);
     }
 
     @Override
@@ -263,9 +266,10 @@ public sealed interface Expression
 
     @Override
     public boolean equals(Object other) {
-      return other instanceof Logical that
-          && connective == that.connective
-          && conditions.equals(that.conditions);
+      return this == other
+          || other instanceof Logical that
+              && connective == that.connective
+              && conditions.equals(that.conditions);
     }
 
     @Override
@@ -295,10 +299,11 @@ public sealed interface Expression
 
     @Override
     public boolean equals(Object other) {
-      return other instanceof Conditional that
-          && condition.equals(that.condition)
-          && then.equals(that.then)
-          && otherwise.equals(that.otherwise);
+      return this == other
+          || other instanceof Conditional that
+              && condition.equals(that.condition)
+              && then.equals(that.then)
+              && otherwise.equals(that.otherwise);
     }
 
     @Override

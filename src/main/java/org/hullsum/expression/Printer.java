@@ -1,6 +1,8 @@
 package org.hullsum.expression;
 
+import java.util.IdentityHashMap;
 import java.util.List;
+import java.util.Map;
 import org.hullsum.expression.Expression.Binary;
 import org.hullsum.expression.Expression.Call;
 import org.hullsum.expression.Expression.Comparison;
@@ -15,9 +17,12 @@ import org.hullsum.expression.Expression.Symbol;
 /**
  * Writes expressions as a person would, such as {@code lift*(radius^2 - x^2 - y^2)}: no parentheses
  * that are not needed, no {@code 1*x}, no {@code + -3}. What is printed reads back to an expression
- * of the same value.
+ * of the same value, unless it is too long to be read by anybody.
  */
 public final class Printer implements Expression.Visitor<Printer.Piece> {
+  /** Nobody reads a longer one. */
+  private static final int MOST_NODES = 20_000;
+
   private static final int OR = 1;
   private static final int AND = 2;
   private static final int NOT = 3;
@@ -41,8 +46,26 @@ public final class Printer implements Expression.Visitor<Printer.Piece> {
 
   private Printer() {}
 
+  /** The formula as text; one of more than {@value #MOST_NODES} parts is only described. */
   public static String print(Expression e) {
-    return e.accept(new Printer()).text();
+    long size = size(e, new IdentityHashMap<>());
+    return size > MOST_NODES
+        ? "(a formula of " + size + " parts, too long to write)"
+        : e.accept(new Printer()).text();
+  }
+
+  /** Number of nodes when shared ones are written out each time. */
+  private static long size(Expression e, Map<Expression, Long> known) {
+    Long size = known.get(e);
+    if (size == null) {
+      long sum = 1;
+      for (Expression child : e.children()) {
+        sum = Math.min(Integer.MAX_VALUE, sum + size(child, known));
+      }
+      size = sum;
+      known.put(e, size);
+    }
+    return size;
   }
 
   private String within(Expression e, int least) {

@@ -5,6 +5,7 @@ import java.util.IdentityHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import org.hullsum.expression.AtomTable.Branches;
 import org.hullsum.expression.Expression.Binary;
 import org.hullsum.expression.Expression.Call;
 import org.hullsum.expression.Expression.Comparison;
@@ -196,14 +197,6 @@ final class Reduction implements Expression.Visitor<Polynomial> {
     if (then.equals(otherwise)) {
       return then;
     }
-    Assembly assembly = atoms.assembly();
-    return Products.of(
-        atoms.structure(
-            Conditional.class,
-            List.of(condition, then, otherwise),
-            new Conditional(
-                assembly.expression(condition),
-                assembly.expression(then),
-                assembly.expression(otherwise))));
+    return Products.of(atoms.conditional(new Branches(condition, then, otherwise)));
   }
 }

@@ -63,6 +63,7 @@ final class ShortestForm {
   private List<Polynomial> variants(Polynomial p) {
     List<Polynomial> forms = new ArrayList<>();
     forms.add(p);
+    new JoinedConditionals(atoms, products).joined(p).ifPresent(forms::add);
     addReplaced(p, Kind.SINE, Kind.COSINE, forms);
     addReplaced(p, Kind.COSINE, Kind.SINE, forms);
     addReplaced(p, Kind.HYPERBOLIC_COSINE, Kind.HYPERBOLIC_SINE, forms);

@@ -1,6 +1,5 @@
 package org.hullsum.expression;
 
-import java.util.ArrayList;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Set;
@@ -19,6 +18,9 @@ import org.hullsum.expression.Expression.Operator;
  * hold, two branches may join smoothly).
  */
 public final class Switches {
+  /** Beyond so many they are taken as they are, without looking for repetitions up to the sign. */
+  private static final int MOST_SIMPLIFIED = 100;
+
   private Switches() {}
 
   /** All of them, simplified, without repetition (up to the sign) and without constants. */
@@ -78,21 +80,14 @@ public final class Switches {
   }
 
   private static void add(Expression function, Set<Expression> switches) {
-    Expression simple = Simplifier.simplify(function);
-    if (Symbols.in(simple).isEmpty()) {
+    if (switches.size() >= MOST_SIMPLIFIED) {
+      switches.add(function);
       return;
     }
-    List<Expression> opposite = new ArrayList<>();
-    opposite.add(Simplifier.simplify(simple.negated()));
-    opposite.add(Simplifier.simplify(swapped(function)));
-    if (opposite.stream().noneMatch(switches::contains)) {
+    Expression simple = Simplifier.simplify(function);
+    if (!Symbols.in(simple).isEmpty()
+        && !switches.contains(Simplifier.simplify(simple.negated()))) {
       switches.add(simple);
     }
-  }
-
-  private static Expression swapped(Expression function) {
-    return function instanceof Expression.Binary b && b.operator() == Expression.Operator.SUBTRACT
-        ? b.right().minus(b.left())
-        : function.negated();
   }
 }
