@@ -68,10 +68,7 @@ final class CaseBuilder {
     Schedule schedule =
         top.get("time").map(new ScheduleReader(formulas)::read).orElse(Schedule.TIMELESS);
     checkTime(top, scope);
-    Set<String> names = new LinkedHashSet<>(patchReader.names());
-    names.addAll(volumeReader.names());
-    names.addAll(volumeReader.envelopeNames());
-    List<Waiver> waivers = waivers(top, names, fields, scope);
+    List<Waiver> waivers = waivers(top, patchReader, volumeReader, fields, scope);
     Optional<String> title = top.get("title").flatMap(v -> values.freeText(v, "`title`"));
     Optional<String> about = top.get("about").flatMap(v -> values.freeText(v, "`about`"));
     if (problems.fatalCount() > 0 || quantity.isEmpty()) {
@@ -106,11 +103,17 @@ final class CaseBuilder {
   }
 
   private List<Waiver> waivers(
-      MapReader top, Set<String> names, FieldReader fields, CaseScope scope) {
-    Set<String> all = new LinkedHashSet<>(names);
-    all.addAll(fields.places().keySet());
-    all.addAll(scope.dimensions().keySet());
-    return top.get("waivers").map(new WaiverReader(values, all)::read).orElse(List.of());
+      MapReader top,
+      PatchReader patches,
+      VolumeReader volumes,
+      FieldReader fields,
+      CaseScope scope) {
+    Set<String> names = new LinkedHashSet<>(patches.names());
+    names.addAll(volumes.names());
+    names.addAll(volumes.envelopeNames());
+    names.addAll(fields.places().keySet());
+    names.addAll(scope.dimensions().keySet());
+    return top.get("waivers").map(new WaiverReader(values, names)::read).orElse(List.of());
   }
 
   private void checkFormat(MapReader top) {
