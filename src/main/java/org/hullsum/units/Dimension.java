@@ -44,7 +44,11 @@ public final class Dimension {
   }
 
   public Dimension dividedBy(Dimension other) {
-    return times(other.power(-1));
+    int[] difference = new int[BASES];
+    for (int i = 0; i < BASES; i++) {
+      difference[i] = twelfths[i] - other.twelfths[i];
+    }
+    return new Dimension(difference);
   }
 
   /**

@@ -50,6 +50,10 @@ final class FriendlyUnits {
     {"ohm", "Ohm"}, {"\u03a9", "Ohm"}, {"\u2126", "Ohm"}, {"mHg", "m[Hg]"}, {"mH2O", "m[H2O]"}
   };
 
+  private static final String US = " as US gallons (3.785411784 L); the British ones are [gal_br]";
+  private static final String ANGULAR =
+      " as an angular speed, one turn being 2 pi rad; for a count write 1/min";
+
   private FriendlyUnits() {}
 
   static void addTo(Map<String, UnitAtom> atoms) {
@@ -76,10 +80,9 @@ final class FriendlyUnits {
 
   private static void addNoted(Map<String, UnitAtom> atoms, UnitTerm minute, UnitTerm hour) {
     UnitTerm gallon = atoms.get("[gal_us]").term();
-    String us = " as US gallons (3.785411784 L); the British ones are [gal_br]";
-    note(atoms, "gal", gallon, "'gal' was read" + us);
-    note(atoms, "gpm", gallon.over(minute), "'gpm' was read per minute" + us);
-    note(atoms, "gph", gallon.over(hour), "'gph' was read per hour" + us);
+    note(atoms, "gal", gallon, "'gal' was read" + US);
+    note(atoms, "gpm", gallon.over(minute), "'gpm' was read per minute" + US);
+    note(atoms, "gph", gallon.over(hour), "'gph' was read per hour" + US);
     UnitTerm barrel = atoms.get("[bbl_us]").term();
     note(atoms, "bbl", barrel, "'bbl' was read as barrels of 42 US gallons, [bbl_us]");
     UnitTerm heat = atoms.get("[Btu_IT]").term();
@@ -88,8 +91,7 @@ final class FriendlyUnits {
     UnitTerm horse = atoms.get("[HP]").term();
     note(atoms, "hp", horse, "'hp' was read as the mechanical horsepower of 550 ft.lbf/s, [HP]");
     UnitTerm turn = atoms.get("circ").term();
-    String angular = " as an angular speed, one turn being 2 pi rad; for a count write 1/min";
-    note(atoms, "rpm", turn.over(minute), "'rpm' was read" + angular);
+    note(atoms, "rpm", turn.over(minute), "'rpm' was read" + ANGULAR);
     note(atoms, "rev", turn, "'rev' was read as a turn of 2 pi rad; for a count write 1");
   }
 

@@ -69,7 +69,7 @@ public final class MeasuredQuantityParser {
       unit = Optional.of(read.value());
     }
     List<UncertaintyTerm> terms = UncertaintyReader.read(cursor, uncertaintyRule, fallback, notes);
-    Optional<Unit> shared = unit.or(() -> unitOf(terms));
+    Optional<Unit> shared = unit.isPresent() ? unit : unitOf(terms);
     Quantity quantity = new Quantity(value, shared.orElse(Unit.ONE), shared.isEmpty());
     return new Noted<>(combine(quantity, terms), notes);
   }
@@ -95,10 +95,12 @@ public final class MeasuredQuantityParser {
 
   /** The unit that the value takes from its uncertainties: the first that is not a part of it. */
   private static Optional<Unit> unitOf(List<UncertaintyTerm> terms) {
-    return terms.stream()
-        .flatMap(term -> term.unit().stream())
-        .filter(unit -> !unit.isRatio())
-        .findFirst();
+    for (UncertaintyTerm term : terms) {
+      if (term.unit().isPresent() && !term.unit().get().isRatio()) {
+        return term.unit();
+      }
+    }
+    return Optional.empty();
   }
 
   private static MeasuredQuantity combine(Quantity value, List<UncertaintyTerm> terms)

@@ -59,7 +59,8 @@ final class UncertaintyReader {
         throw fault(
             cursor.position(),
             cursor.text().length(),
-            "expected ± (or +/-) and an uncertainty, as in 41.8 m3/h ± 0.6 m3/h (k=2)");
+            "expected ± (or +/-) and an uncertainty, as in 41.8 m3/h ± 0.6 m3/h (k=2); a unit holds"
+                + " no blanks");
       }
       if (terms.size() == MAX_TERMS) {
         throw fault(cursor.position(), cursor.text().length(), "more than 50 uncertainties");
@@ -79,7 +80,8 @@ final class UncertaintyReader {
     int end = start + cursor.text().substring(start, cursor.position()).stripTrailing().length();
     cursor.skipBlanks();
     UncertaintyMeaningReader.Stated stated = UncertaintyMeaningReader.parenthesis(cursor);
-    Optional<UncertaintyMeaning> meaning = stated.meaning().or(() -> fallback);
+    Optional<UncertaintyMeaning> meaning =
+        stated.meaning().isPresent() ? stated.meaning() : fallback;
     if (meaning.isEmpty()) {
       String term = cursor.text().substring(start, end);
       throw fault(
@@ -102,6 +104,14 @@ final class UncertaintyReader {
       return new UncertaintyTerm.Absolute();
     }
     if (!cursor.skipWord("of")) {
+      if (Character.isLetter(cursor.peek())) {
+        throw fault(
+            cursor.position(),
+            cursor.position() + 1,
+            "expected 'of value', 'of' and a span (of 60 m3/h), 'absolute', or the meaning in"
+                + " parentheses; "
+                + UncertaintyMeaningReader.SPELLINGS);
+      }
       return new UncertaintyTerm.Plain();
     }
     cursor.skipBlanks();
@@ -139,7 +149,11 @@ final class UncertaintyReader {
       return Optional.empty();
     }
     Noted<Unit> unit = cursor.unit(rule);
-    unit.notes().stream().filter(note -> !notes.contains(note)).forEach(notes::add);
+    for (String note : unit.notes()) {
+      if (!notes.contains(note)) {
+        notes.add(note);
+      }
+    }
     return Optional.of(unit.value());
   }
 

@@ -30,7 +30,8 @@ final class UnitAdvice {
           case '[' -> "this '[' is never closed";
           case '(' -> "expected an operator before '(', or a blank where the unit ends";
           case ')' -> "expected a unit before ')'";
-          case '-', '+', '−' -> "a sign stands only before the digits of an exponent";
+          case '-', '+', '−' ->
+              "a sign stands only before the digits of an exponent; an uncertainty begins with ± or +/-";
           default ->
               "unexpected '" + text.substring(at, end) + "' in a unit; expected one such as m3/h";
         };
@@ -57,18 +58,31 @@ final class UnitAdvice {
   static List<String> nearest(String symbol) {
     List<String> sameButCase = new ArrayList<>();
     List<String> oneSlip = new ArrayList<>();
+    int leastChanges = Integer.MAX_VALUE;
     if (symbol.length() > MAX_QUOTED) {
       return oneSlip;
     }
     for (String known : candidates()) {
       if (known.equalsIgnoreCase(symbol)) {
         sameButCase.add(known);
+        leastChanges = Math.min(leastChanges, changes(symbol, known));
       } else if (symbol.length() > 1 && known.length() > 1 && oneSlipAway(symbol, known)) {
         oneSlip.add(known);
       }
     }
+    int least = leastChanges;
+    sameButCase.removeIf(known -> changes(symbol, known) > least);
     List<String> best = sameButCase.isEmpty() ? oneSlip : sameButCase;
     return List.copyOf(best.subList(0, Math.min(MAX_SUGGESTIONS, best.size())));
+  }
+
+  /** In how many places two texts of the same length differ. */
+  private static int changes(String a, String b) {
+    int count = 0;
+    for (int i = 0; i < Math.min(a.length(), b.length()); i++) {
+      count += a.charAt(i) == b.charAt(i) ? 0 : 1;
+    }
+    return count;
   }
 
   private static List<String> candidates() {

@@ -108,12 +108,13 @@ final class UnitCursor {
     return isDigit(next) || isSign(next) && isDigit(charAt(position + 1)) || atSuperscript();
   }
 
-  /** Whether a decimal point follows the digit before. */
+  /** Whether a decimal point follows the digit before; a product with {@code 10*n} has none. */
   boolean atDecimalPoint() {
     return position > 0
         && isDigit(charAt(position - 1))
         && peek() == '.'
-        && isDigit(charAt(position + 1));
+        && isDigit(charAt(position + 1))
+        && !(text.startsWith("10", position + 1) && atPowerOfTen(position + 3));
   }
 
   /** Reads a whole exponent, plain or superscript; {@link #atExponent} must hold. */

@@ -3,7 +3,6 @@ package org.hullsum.units;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
-import java.util.Optional;
 
 /** Gathers what a report must say of how a unit was read, each note once. */
 final class UnitNoteAccumulator {
@@ -38,12 +37,14 @@ final class UnitNoteAccumulator {
    * @param inverted whether it divides
    */
   void unit(UnitAtom atom, String symbol, int exponent, boolean inverted) {
-    atom.note().ifPresent(this::add);
+    if (atom.note().isPresent()) {
+      add(atom.note().get());
+    }
     if (symbol.equals("Mm") && exponent == 3) {
       add("'Mm3' was read as cubic megametres (10*18 m3); a million cubic metres is hm3");
     }
-    if (inverted) {
-      Optional.ofNullable(CAPITALS.get(symbol)).ifPresent(this::add);
+    if (inverted && CAPITALS.containsKey(symbol)) {
+      add(CAPITALS.get(symbol));
     }
   }
 

@@ -58,7 +58,7 @@ final class UnitTable {
   /** With a leading micro sign, in either of its two characters, as a plain {@code u}. */
   private static String plainMicro(String symbol) {
     boolean micro = symbol.startsWith("\u00b5") || symbol.startsWith("\u03bc");
-    return micro ? "u" + symbol.substring(1) : symbol;
+    return micro ? "u".concat(symbol.substring(1)) : symbol;
   }
 
   private static UnitAtom prefixed(String symbol, UnitAtom stem, int tens) {

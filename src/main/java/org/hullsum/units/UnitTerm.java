@@ -18,7 +18,8 @@ record UnitTerm(Magnitude magnitude, Dimension dimension, double offset) {
   }
 
   UnitTerm over(UnitTerm other) {
-    return times(other.power(-1));
+    return new UnitTerm(
+        magnitude.times(other.magnitude.inverse()), dimension.dividedBy(other.dimension), 0);
   }
 
   /**

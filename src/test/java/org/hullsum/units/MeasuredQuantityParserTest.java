@@ -174,6 +174,7 @@ class MeasuredQuantityParserTest {
         "5 m ± 1 % absolute (k=2) | DIMENSION | 6 | 18 | measure the same",
         "5 ± 1 % absolute (k=2) | UNCERTAINTY | 4 | 16 | unit",
         "5 ± 1 % of 3 m (k=2) | UNCERTAINTY | 4 | 14 | after the value as well",
+        "5 m ± 1 % FS (k=2) | UNCERTAINTY | 10 | 11 | span",
         "5 m ± 1 m (k=0) | UNCERTAINTY | 13 | 14 | above zero",
         "5 m ± 1 m (u) | UNCERTAINTY | 11 | 12 | (k=1)",
         "5 m ± 1 m (k) | UNCERTAINTY | 11 | 12 | (k=1)",

@@ -29,7 +29,8 @@ class UcumOracleTest {
   /**
    * Where the library differs, it is out of date or at fault: the electronvolt, the elementary
    * charge and the dalton are of CODATA 2006 there; its horsepower lacks the factor 550; it has no
-   * degree Rankine.
+   * degree Rankine. Nor has it powers of ten such as {@code 10*3}, which are tested by hand, or the
+   * deciare.
    */
   private static final Set<String> NOT_COMPARED = Set.of("eV", "[e]", "u", "[HP]", "[degR]");
 
@@ -39,6 +40,8 @@ class UcumOracleTest {
     UnitFormat format = UCUMFormat.getInstance(UCUMFormat.Variant.CASE_SENSITIVE);
     try {
       return format.parse(code).getConverterToAny(format.parse(dimension.toString()));
+    } catch (RuntimeException e) {
+      throw new AssertionError(code + " is not read by the oracle", e);
     } catch (IncommensurableException e) {
       throw new AssertionError(code + " is not of dimension " + dimension, e);
     }
@@ -74,13 +77,12 @@ class UcumOracleTest {
         List.of(
             "Y", "Z", "E", "P", "T", "G", "M", "k", "h", "da", "d", "c", "m", "u", "n", "p", "f",
             "a", "z", "y");
-    // The first two are units of their own here; the library can't read the last.
-    Set<String> apart = Set.of("ft", "kn", "dar");
+    Set<String> readOtherwise = Set.of("ft", "dar");
     int compared = 0;
     for (UnitAtom atom : codesOfBoth()) {
       for (String prefix : prefixes) {
         String code = prefix + atom.symbol();
-        if (atom.metric() && !apart.contains(code)) {
+        if (atom.metric() && !readOtherwise.contains(code)) {
           compare(code);
           compared++;
         }
@@ -103,19 +105,26 @@ class UcumOracleTest {
     StringBuilder code = new StringBuilder(random.nextInt(10) == 0 && depth == 2 ? "/" : "");
     int factors = 2 + random.nextInt(2);
     for (int i = 0; i < factors; i++) {
-      if (i > 0) {
-        code.append(random.nextBoolean() ? '.' : '/');
-      }
-      code.append(
+      String factor =
           depth > 0 && random.nextInt(4) == 0
               ? "(" + product(random, atoms, depth - 1) + ")"
-              : factor(random, atoms));
+              : factor(random, atoms);
+      if (i > 0) {
+        // A point between two digits would be a decimal point, which ours refuses.
+        boolean point =
+            Character.isDigit(code.charAt(code.length() - 1))
+                && Character.isDigit(factor.charAt(0));
+        code.append(!point && random.nextBoolean() ? '.' : '/');
+      }
+      code.append(factor);
     }
     return code.toString();
   }
 
-  /** Without powers of ten and annotated powers: the library reads neither. */
   private static String factor(Random random, List<UnitAtom> atoms) {
+    if (random.nextInt(12) == 0) {
+      return "" + (1 + random.nextInt(60));
+    }
     UnitAtom atom = atoms.get(random.nextInt(atoms.size()));
     while (atom.term().offset() != 0) {
       atom = atoms.get(random.nextInt(atoms.size()));
@@ -124,8 +133,7 @@ class UcumOracleTest {
     String prefix = prefixed ? PREFIXES.get(random.nextInt(PREFIXES.size())) : "";
     int exponent = random.nextInt(8) - 3;
     String power = exponent == 0 || exponent == 1 || exponent > 3 ? "" : "" + exponent;
-    String annotation = power.isEmpty() && random.nextInt(10) == 0 ? "{x}" : "";
-    return prefix + atom.symbol() + power + annotation;
+    return prefix + atom.symbol() + power + (random.nextInt(10) == 0 ? "{x}" : "");
   }
 
   @Test

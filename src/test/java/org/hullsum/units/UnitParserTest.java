@@ -96,6 +96,7 @@ class UnitParserTest {
     "10^3.m, 1e3, m",
     "10*3, 1000, 1",
     "10*m, 10, m",
+    "m2.10*3, 1000, m2",
     "60.s, 60, s",
     "2/min, 0.033333333333333333, s-1",
     "{tank}, 1, 1",
@@ -158,7 +159,7 @@ class UnitParserTest {
   @CsvSource(
       delimiter = '|',
       value = {
-        "Kg/s | 0 | 2 | did you mean kg",
+        "Kg/s | 0 | 2 | did you mean kg?",
         "M3/h | 0 | 1 | did you mean m",
         "lpm | 0 | 3 | write L/min",
         "kg//s | 3 | 4 | side by side",

@@ -12,7 +12,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 
 /** Random texts, made of the pieces of real ones: read, or refused with a place in the text. */
 class UnitTextFuzzTest {
-  private static final int TEXTS = 40_000;
+  private static final int TEXTS = 8_000;
   private static final String[] PIECES = {
     "m",
     "3",
