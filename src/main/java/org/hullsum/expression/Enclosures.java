@@ -260,7 +260,8 @@ final class Enclosures {
   }
 
   void atan2(int t, int y, int x) {
-    boolean cut = low[x] <= 0 && containsZero(y) && (low[y] < 0 || high[x] >= 0);
+    // a zero may have been computed as -0, which is on the other side of the cut
+    boolean cut = low[x] <= 0 && containsZero(y);
     double half = up(Math.PI, 1);
     if (cut) {
       set(t, -half, half);

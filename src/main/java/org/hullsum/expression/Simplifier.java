@@ -5,8 +5,8 @@ import org.hullsum.expression.Expression.Call;
 import org.hullsum.expression.Expression.Negation;
 
 /**
- * Simplifies expressions without changing their value where it is finite (but for rounding); where
- * the value was not finite it may become so, as in x/x.
+ * Simplifies expressions without changing their value where it is finite (but for rounding and the
+ * sign of zero); where the value was not finite it may become so, as in x/x.
  *
  * <p>An expression is brought into a sum of products of powers of its atoms, like terms and factors
  * collected, and of the forms that are equal by multiplying out, by common denominators and by sin²

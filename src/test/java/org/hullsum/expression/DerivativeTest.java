@@ -45,7 +45,7 @@ class DerivativeTest {
   private static int compare(Expression e, Map<String, Double> point) {
     double[] expected = difference(e, point);
     double scale = Math.max(1, Math.abs(expected[0]));
-    if (!(expected[1] < 1e-4 * scale)) {
+    if (!(expected[1] < 1e-4 * scale) || RandomExpressions.isWild(e, point)) {
       return 0;
     }
     double found = NaiveEvaluator.evaluate(Derivative.of(e, "x"), point);
