@@ -114,6 +114,9 @@ final class SwitchSearch {
 
   private static boolean isLeast(double[][] s, int i, int j) {
     double here = Math.abs(s[i][j]);
+    if (here == 0) {
+      return false;
+    }
     double largest = 0;
     for (int[] step : AROUND) {
       int a = i + step[0];
