@@ -26,6 +26,9 @@ record YamlText(String text, Style style, boolean inFlow, int start, int end, So
 
   private static final int LONGEST_SHOWN = 40;
 
+  /** What after a backslash stands for white space. */
+  private static final String ESCAPED_BLANKS = " \t\r\ntnvfrLP";
+
   boolean plain() {
     return style == Style.PLAIN;
   }
@@ -101,21 +104,21 @@ record YamlText(String text, Style style, boolean inFlow, int start, int end, So
   private int skipBlanks(int from) {
     int at = from;
     while (at < end && isBlank(at)) {
-      at += lineContinues(at) ? 2 : 1;
+      at += escapesBlank(at) ? 2 : 1;
     }
     return at;
   }
 
   private boolean isBlank(int at) {
-    return Character.isWhitespace(source.text().charAt(at)) || lineContinues(at);
+    return Character.isWhitespace(source.text().charAt(at)) || escapesBlank(at);
   }
 
-  /** An escaped line end, which joins two lines of a double-quoted text. */
-  private boolean lineContinues(int at) {
+  /** An escaped line end, which joins two lines of a double-quoted text, or an escaped blank. */
+  private boolean escapesBlank(int at) {
     return style == Style.DOUBLE_QUOTED
         && source.text().charAt(at) == '\\'
         && at + 1 < end
-        && Character.isWhitespace(source.text().charAt(at + 1));
+        && ESCAPED_BLANKS.indexOf(source.text().charAt(at + 1)) >= 0;
   }
 
   /** The index after the character of the text that is written at an index of the file. */
