@@ -21,6 +21,7 @@ import org.snakeyaml.engine.v2.nodes.ScalarNode;
 import org.snakeyaml.engine.v2.nodes.SequenceNode;
 import org.snakeyaml.engine.v2.parser.ParserImpl;
 import org.snakeyaml.engine.v2.scanner.StreamReader;
+import org.snakeyaml.engine.v2.schema.FailsafeSchema;
 
 /**
  * Reads YAML 1.2 into {@link YamlValue}s, within bounds on nesting, aliases and what the aliases
@@ -58,6 +59,7 @@ final class YamlReader {
         LoadSettings.builder()
             .setLabel(source.file())
             .setUseMarks(true)
+            .setSchema(new FailsafeSchema())
             .setAllowDuplicateKeys(true)
             .setAllowNonScalarKeys(true)
             .setMaxAliasesForCollections(MOST_ALIASES)

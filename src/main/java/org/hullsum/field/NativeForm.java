@@ -36,6 +36,9 @@ final class NativeForm {
    */
   static final double AXIS_GUARD = 1e-150;
 
+  private static final Expression ZERO = Expression.number(0);
+  private static final Expression ONE = Expression.number(1);
+
   private final Coordinates coordinates;
   private final List<String> names;
 
@@ -93,7 +96,7 @@ final class NativeForm {
   Expression toCartesian(Expression e) {
     return coordinates.kind() == Coordinates.Kind.CARTESIAN
         ? e
-        : Simplifier.simplify(Substitution.replace(e, guarded()));
+        : Substitution.replace(e, guarded());
   }
 
   /** The Cartesian components, in {@code x y z}, of a vector with native components. */
@@ -103,11 +106,34 @@ final class NativeForm {
     }
     VectorExpression placed = f.replace(guarded ? guarded() : coordinates.definitions());
     List<VectorExpression> unit = coordinates.unitVectors();
-    return unit.get(0)
-        .times(placed.x())
-        .plus(unit.get(1).times(placed.y()))
-        .plus(unit.get(2).times(placed.z()))
-        .simplified();
+    return new VectorExpression(
+        combined(placed, unit, VectorExpression::x),
+        combined(placed, unit, VectorExpression::y),
+        combined(placed, unit, VectorExpression::z));
+  }
+
+  /** A way to take one component of a vector. */
+  @FunctionalInterface
+  private interface Component {
+    Expression of(VectorExpression vector);
+  }
+
+  /**
+   * One Cartesian component. Only terms that vanish are left out: what is evaluated needs no
+   * further simplifying, which would cost more than it saves.
+   */
+  private static Expression combined(
+      VectorExpression components, List<VectorExpression> unit, Component component) {
+    List<Expression> stated = List.of(components.x(), components.y(), components.z());
+    Expression sum = ZERO;
+    for (int i = 0; i < stated.size(); i++) {
+      Expression direction = component.of(unit.get(i));
+      if (!ZERO.equals(stated.get(i)) && !ZERO.equals(direction)) {
+        Expression term = ONE.equals(direction) ? stated.get(i) : stated.get(i).times(direction);
+        sum = ZERO.equals(sum) ? term : sum.plus(term);
+      }
+    }
+    return sum;
   }
 
   private Map<String, Expression> guarded() {

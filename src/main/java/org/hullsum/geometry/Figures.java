@@ -67,7 +67,7 @@ final class Figures {
     if (!direction.isFinite()) {
       throw new SurfaceFault(key, key + " is not finite; state three finite numbers");
     }
-    if (direction.equals(Vector3.ZERO) || direction.norm() == 0) {
+    if (direction.norm() == 0) {
       throw new SurfaceFault(
           key, key + " has length zero; state a direction such as [0, 0, 1], of any length");
     }
