@@ -9,7 +9,11 @@ import java.nio.charset.CodingErrorAction;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.security.MessageDigest;
+import java.security.NoSuchAlgorithmException;
+import java.util.HexFormat;
 import java.util.Optional;
+import org.hullsum.problem.InternalFault;
 import org.hullsum.problem.Place;
 import org.hullsum.problem.ProblemKind;
 
@@ -57,7 +61,7 @@ final class FileTextReader {
       return Optional.empty();
     }
     return decode(bytes, name, problems)
-        .map(text -> new Content(new SourceText(name, text), Sha256.of(bytes)));
+        .map(text -> new Content(new SourceText(name, text), sha256(bytes)));
   }
 
   private static String reason(IOException e, Path file) {
@@ -137,5 +141,13 @@ final class FileTextReader {
       }
     }
     return -1;
+  }
+
+  private static String sha256(byte[] bytes) {
+    try {
+      return HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(bytes));
+    } catch (NoSuchAlgorithmException e) {
+      throw new InternalFault("every Java platform has SHA-256: " + e.getMessage());
+    }
   }
 }
