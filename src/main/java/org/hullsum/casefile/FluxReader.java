@@ -210,7 +210,7 @@ final class FluxReader {
     }
     if (figure.isPresent() && Figures.isBareName(figure.get().expression())) {
       String input = Figures.name(figure.get().expression());
-      noteExact(patch, value, input, fixed);
+      noteExact(patch, value, input);
       correlations.meters(patch, input);
     }
     if (map.has("correlated-with")) {
@@ -219,13 +219,13 @@ final class FluxReader {
     return figure.map(f -> new FluxStatement.Metered(f.expression(), fixed));
   }
 
-  private void noteExact(String patch, YamlValue value, String input, boolean fixed) {
+  private void noteExact(String patch, YamlValue value, String input) {
     boolean inline =
         formulas.scope().inputs().containsKey(input)
             && formulas.scope().inputs().get(input).inline();
     boolean stated =
         value.asText().filter(t -> MeasuredReader.hasUncertainty(t.text())).isPresent();
-    if (inline && !stated && !fixed) {
+    if (inline && !stated) {
       formulas
           .scope()
           .note(

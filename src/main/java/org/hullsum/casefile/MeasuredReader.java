@@ -66,8 +66,23 @@ final class MeasuredReader {
     if (hasUncertainty(text.get().text())) {
       return figure(text.get()).flatMap(figure -> input(text.get(), figure, name, need));
     }
-    Optional<Formula> formula = formulas.formula(value, need);
+    Optional<Formula> formula = formulas.formula(value, need).filter(f -> isFinite(f, text.get()));
     return formula.map(f -> Figures.isFigure(f.expression()) ? exact(text.get(), f, name) : f);
+  }
+
+  /** Where the parameters are known; a formula of time has no one value. */
+  private boolean isFinite(Formula formula, YamlText text) {
+    Optional<Double> number = scope.value(formula.expression());
+    if (number.isPresent() && !Double.isFinite(number.get())) {
+      scope
+          .problems()
+          .add(
+              ProblemKind.WRONG_VALUE,
+              text.place(),
+              text.shown() + " is not a finite number: it is " + number.get());
+      return false;
+    }
+    return true;
   }
 
   private Formula exact(YamlText text, Formula formula, String name) {

@@ -362,6 +362,12 @@ class OneFaultTest {
             "depth: ¤radius/0",
             ProblemKind.WRONG_VALUE,
             "not a finite number"),
+        fault(
+            "meter that is not finite",
+            "metered: intake - 3 m3/h",
+            "metered: ¤intake/0",
+            ProblemKind.WRONG_VALUE,
+            "not a finite number"),
         fault("radius of zero", "radius: 50 mm", "radius: ¤0", ProblemKind.WRONG_VALUE, "radius"),
         fault(
             "direction of no length",
