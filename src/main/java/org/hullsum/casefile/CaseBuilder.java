@@ -91,7 +91,7 @@ final class CaseBuilder {
             fields.places(),
             problems.warnings(),
             scope.notes(),
-            List.of(new Case.SourceFile(options.name(), content.sha256())),
+            List.of(new Case.SourceFile(options.name(), content.digest().text())),
             scope.usedNames()));
   }
 

@@ -9,11 +9,7 @@ import java.nio.charset.CodingErrorAction;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.security.MessageDigest;
-import java.security.NoSuchAlgorithmException;
-import java.util.HexFormat;
 import java.util.Optional;
-import org.hullsum.problem.InternalFault;
 import org.hullsum.problem.Place;
 import org.hullsum.problem.ProblemKind;
 
@@ -28,7 +24,7 @@ final class FileTextReader {
   private static final char BYTE_ORDER_MARK = '\uFEFF';
 
   /** The text of a file, with the digest of its bytes. */
-  record Content(SourceText source, String sha256) {}
+  record Content(SourceText source, FileDigest digest) {}
 
   private FileTextReader() {}
 
@@ -60,8 +56,9 @@ final class FileTextReader {
               + " MB; large tables belong in CSV files");
       return Optional.empty();
     }
+    FileDigest digest = FileDigest.of(bytes);
     return decode(bytes, name, problems)
-        .map(text -> new Content(new SourceText(name, text), sha256(bytes)));
+        .map(text -> new Content(new SourceText(name, text), digest));
   }
 
   private static String reason(IOException e, Path file) {
@@ -141,13 +138,5 @@ final class FileTextReader {
       }
     }
     return -1;
-  }
-
-  private static String sha256(byte[] bytes) {
-    try {
-      return HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(bytes));
-    } catch (NoSuchAlgorithmException e) {
-      throw new InternalFault("every Java platform has SHA-256: " + e.getMessage());
-    }
   }
 }

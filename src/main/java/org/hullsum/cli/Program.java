@@ -42,7 +42,7 @@ final class Program {
   ExitCode run(List<String> arguments) {
     ExitCode code;
     try {
-      code = arguments.equals(VERSION) ? version() : parse(commands(), arguments);
+      code = arguments.equals(VERSION) ? version() : parse(commands(arguments), arguments);
     } catch (Throwable fault) {
       err.line("hullsum: " + Faults.describe(fault));
       code = ExitCode.FAULT;
@@ -54,13 +54,25 @@ final class Program {
     return code;
   }
 
-  private static CommandLine commands() {
+  /**
+   * The commands that can be asked for; of an audit, which is to start soonest, no other is
+   * declared.
+   */
+  private static CommandLine commands(List<String> arguments) {
     CommandSpec root = withHelp(CommandSpec.create().name("hullsum"));
     root.usageMessage()
         .description(
             "Checks whether what flows through closed surfaces balances with what is made and kept"
                 + " inside.");
     root.addSubcommand("audit", withHelp(AuditOptionsReader.declare()));
+    if (arguments.isEmpty() || !arguments.get(0).equals("audit")) {
+      root.addSubcommand("start", startCommand());
+      root.addSubcommand("schema", schemaCommand());
+    }
+    return new CommandLine(root).setExpandAtFiles(false).setUsageHelpWidth(USAGE_WIDTH);
+  }
+
+  private static CommandSpec startCommand() {
     CommandSpec start = withHelp(CommandSpec.create());
     start.usageMessage().description("Prints a small, complete case to begin from.");
     start.addPositional(
@@ -71,15 +83,16 @@ final class Program {
             .type(String.class)
             .description(StarterCase.kinds() + ".")
             .build());
-    root.addSubcommand("start", start);
+    return start;
+  }
+
+  private static CommandSpec schemaCommand() {
     CommandSpec schema = withHelp(CommandSpec.create());
     schema.usageMessage().description("Prints the JSON Schema of the case format, for editors.");
-    root.addSubcommand("schema", schema);
-    return new CommandLine(root).setExpandAtFiles(false).setUsageHelpWidth(USAGE_WIDTH);
+    return schema;
   }
 
   private static CommandSpec withHelp(CommandSpec spec) {
-    spec.version(ProgramVersion.text());
     spec.usageMessage().sortOptions(false);
     spec.addOption(
         OptionSpec.builder("-h", "--help")
