@@ -22,10 +22,12 @@ final class AuditOptionsReader {
 
   private final CommandLine command;
   private final ParseResult parsed;
+  private final AuditRequest usual;
 
   private AuditOptionsReader(CommandLine command, ParseResult parsed) {
     this.command = command;
     this.parsed = parsed;
+    this.usual = AuditRequest.usual(parsed.matchedPositionalValue(0, List.of()));
   }
 
   static CommandSpec declare() {
@@ -106,7 +108,7 @@ final class AuditOptionsReader {
       throw fault("--json and --junit both write to " + json.get() + "; give them two places");
     }
     return new AuditRequest(
-        parsed.matchedPositionalValue(0, List.of()),
+        usual.cases(),
         json,
         junit,
         parameters(),
@@ -149,8 +151,7 @@ final class AuditOptionsReader {
   }
 
   private int threads() {
-    int threads =
-        parsed.matchedOptionValue("--threads", Runtime.getRuntime().availableProcessors());
+    int threads = parsed.matchedOptionValue("--threads", usual.threads());
     if (threads < 1 || threads > MOST_THREADS) {
       throw fault("--threads takes a number from 1 to " + MOST_THREADS + ", not " + threads);
     }
@@ -158,7 +159,7 @@ final class AuditOptionsReader {
   }
 
   private int digits() {
-    int digits = parsed.matchedOptionValue("--digits", AuditOptions.USUAL_DIGITS);
+    int digits = parsed.matchedOptionValue("--digits", usual.digits());
     if (digits < 1 || digits > AuditOptions.MOST_DIGITS) {
       throw fault(
           "--digits takes a number from 1 to " + AuditOptions.MOST_DIGITS + ", not " + digits);

@@ -4,6 +4,7 @@ import java.nio.file.Path;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import org.hullsum.audit.AuditOptions;
 
 /**
  * What {@code hullsum audit} was asked to do.
@@ -34,6 +35,20 @@ record AuditRequest(
     cases = List.copyOf(cases);
     parameters = Map.copyOf(parameters);
     allowedFolders = List.copyOf(allowedFolders);
+  }
+
+  /** What is asked where nothing but the cases is named. */
+  static AuditRequest usual(List<String> cases) {
+    return new AuditRequest(
+        cases,
+        Optional.empty(),
+        Optional.empty(),
+        Map.of(),
+        List.of(),
+        Runtime.getRuntime().availableProcessors(),
+        AuditOptions.USUAL_DIGITS,
+        true,
+        false);
   }
 
   /** Whether a document takes standard output, so that no text is printed there. */

@@ -42,7 +42,12 @@ final class Program {
   ExitCode run(List<String> arguments) {
     ExitCode code;
     try {
-      code = arguments.equals(VERSION) ? version() : parse(commands(arguments), arguments);
+      code =
+          arguments.equals(VERSION)
+              ? version()
+              : isPlainAudit(arguments)
+                  ? audit(AuditRequest.usual(arguments.subList(1, arguments.size())))
+                  : parse(commands(), arguments);
     } catch (Throwable fault) {
       err.line("hullsum: " + Faults.describe(fault));
       code = ExitCode.FAULT;
@@ -55,24 +60,22 @@ final class Program {
   }
 
   /**
-   * The commands that can be asked for; of an audit, which is to start soonest, no other is
-   * declared.
+   * Whether it is an audit of files and nothing else. The most frequent command is understood
+   * without the command-line library, which takes as long to load as a small case to read.
    */
-  private static CommandLine commands(List<String> arguments) {
+  private static boolean isPlainAudit(List<String> arguments) {
+    return arguments.size() > 1
+        && arguments.get(0).equals("audit")
+        && arguments.stream().noneMatch(a -> a.isEmpty() || a.startsWith("-"));
+  }
+
+  private static CommandLine commands() {
     CommandSpec root = withHelp(CommandSpec.create().name("hullsum"));
     root.usageMessage()
         .description(
             "Checks whether what flows through closed surfaces balances with what is made and kept"
                 + " inside.");
     root.addSubcommand("audit", withHelp(AuditOptionsReader.declare()));
-    if (arguments.isEmpty() || !arguments.get(0).equals("audit")) {
-      root.addSubcommand("start", startCommand());
-      root.addSubcommand("schema", schemaCommand());
-    }
-    return new CommandLine(root).setExpandAtFiles(false).setUsageHelpWidth(USAGE_WIDTH);
-  }
-
-  private static CommandSpec startCommand() {
     CommandSpec start = withHelp(CommandSpec.create());
     start.usageMessage().description("Prints a small, complete case to begin from.");
     start.addPositional(
@@ -83,13 +86,11 @@ final class Program {
             .type(String.class)
             .description(StarterCase.kinds() + ".")
             .build());
-    return start;
-  }
-
-  private static CommandSpec schemaCommand() {
+    root.addSubcommand("start", start);
     CommandSpec schema = withHelp(CommandSpec.create());
     schema.usageMessage().description("Prints the JSON Schema of the case format, for editors.");
-    return schema;
+    root.addSubcommand("schema", schema);
+    return new CommandLine(root).setExpandAtFiles(false).setUsageHelpWidth(USAGE_WIDTH);
   }
 
   private static CommandSpec withHelp(CommandSpec spec) {
@@ -144,13 +145,14 @@ final class Program {
       return ExitCode.FINE;
     }
     return switch (command.getCommandName()) {
-      case "audit" ->
-          new AuditRun(
-                  AuditOptionsReader.read(command, parsed), out, err, clock, pipeline, terminal)
-              .run();
+      case "audit" -> audit(AuditOptionsReader.read(command, parsed));
       case "start" -> start(command, parsed.matchedPositionalValue(0, ""));
       default -> schema();
     };
+  }
+
+  private ExitCode audit(AuditRequest request) {
+    return new AuditRun(request, out, err, clock, pipeline, terminal).run();
   }
 
   private ExitCode start(CommandLine command, String kind) {
