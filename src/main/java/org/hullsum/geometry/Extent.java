@@ -5,14 +5,14 @@ import java.util.Optional;
 import org.hullsum.numeric.Vector3;
 
 /** How large a surface is, untrimmed: what tolerances are relative to. */
-final class Extent {
+public final class Extent {
   /** Points along each direction of a chart. */
   private static final int SAMPLES = 9;
 
   private Extent() {}
 
   /** Twice the largest distance of sampled positions from the first of them. */
-  static double of(Surface surface, Map<String, Double> parameters) {
+  public static double of(Surface surface, Map<String, Double> parameters) {
     double[][] at = ChartSamples.grid(SAMPLES);
     int count = at[0].length;
     Optional<Vector3> first = Optional.empty();

@@ -1,0 +1,38 @@
+package org.hullsum.closure;
+
+import java.util.List;
+import java.util.Map;
+import org.hullsum.geometry.BoundaryCurves;
+import org.hullsum.geometry.Extent;
+import org.hullsum.geometry.Surface;
+
+/**
+ * The boundary of one patch.
+ *
+ * @param size of the patch, a length: what tolerances are relative to
+ * @param rims its boundary curves, none where it is closed in itself
+ */
+public record PatchRims(double size, List<Rim> rims) {
+  /**
+   * Distance of the points' polyline from a curve, relative to the size: 128 points of a circle.
+   */
+  private static final double CHORD = 2e-4;
+
+  public PatchRims {
+    rims = List.copyOf(rims);
+  }
+
+  /**
+   * Of a surface given by formulas.
+   *
+   * @param parameters the value of every parameter in them
+   */
+  public static PatchRims of(Surface surface, Map<String, Double> parameters) {
+    double size = Extent.of(surface, parameters);
+    List<Rim> rims =
+        BoundaryCurves.of(surface, parameters, CHORD * size).stream()
+            .map(curve -> new Rim(curve.points(), curve.closed(), true))
+            .toList();
+    return new PatchRims(size, rims);
+  }
+}
