@@ -18,6 +18,9 @@ public record PatchRims(double size, List<Rim> rims) {
    */
   private static final double CHORD = 2e-4;
 
+  /** The same for a trimmed surface: the trim's curves may be much smaller than the surface. */
+  private static final double TRIMMED_CHORD = 2e-5;
+
   public PatchRims {
     rims = List.copyOf(rims);
   }
@@ -29,8 +32,9 @@ public record PatchRims(double size, List<Rim> rims) {
    */
   public static PatchRims of(Surface surface, Map<String, Double> parameters) {
     double size = Extent.of(surface, parameters);
+    double chord = surface.trim().isPresent() ? TRIMMED_CHORD : CHORD;
     List<Rim> rims =
-        BoundaryCurves.of(surface, parameters, CHORD * size).stream()
+        BoundaryCurves.of(surface, parameters, chord * size).stream()
             .map(curve -> new Rim(curve.points(), curve.closed(), true))
             .toList();
     return new PatchRims(size, rims);

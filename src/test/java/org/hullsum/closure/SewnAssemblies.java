@@ -11,7 +11,6 @@ import org.hullsum.flux.Assemblies.Piece;
 import org.hullsum.geometry.ConeShape;
 import org.hullsum.geometry.CylinderShape;
 import org.hullsum.geometry.DiskShape;
-import org.hullsum.geometry.Placement;
 import org.hullsum.geometry.Span;
 import org.hullsum.geometry.SphereShape;
 import org.hullsum.geometry.TorusShape;
@@ -27,7 +26,7 @@ final class SewnAssemblies {
     this.random = random;
   }
 
-  /** One of any kind, moved at random. */
+  /** One of any kind; moved at random where it has no trim, which stays where it is. */
   Assembly next() {
     Assembly plain =
         switch (random.nextInt(8)) {
@@ -40,7 +39,8 @@ final class SewnAssemblies {
           case 6 -> drilled();
           default -> Assemblies.branch();
         };
-    return Assemblies.moved(plain, Assemblies.randomPlacement(random));
+    boolean trimmed = plain.pieces().stream().anyMatch(p -> p.surface().trim().isPresent());
+    return trimmed ? plain : Assemblies.moved(plain, Assemblies.randomPlacement(random));
   }
 
   private double size() {
@@ -271,10 +271,5 @@ final class SewnAssemblies {
     addDisks(Vector3.ZERO, Vector3.Z.negated(), outer, inner, pieces);
     addDisks(Vector3.Z.times(height), Vector3.Z, outer, inner, pieces);
     return new Assembly("drilled", pieces, Math.PI * (outer * outer - inner * inner) * height);
-  }
-
-  /** A placement for those who want one more. */
-  Placement placement() {
-    return Assemblies.randomPlacement(random);
   }
 }

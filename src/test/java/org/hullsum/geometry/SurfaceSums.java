@@ -7,7 +7,7 @@ import org.apache.commons.math3.analysis.integration.gauss.GaussIntegratorFactor
 import org.hullsum.numeric.Vector3;
 
 /** Integrals over charts by a plain tensor rule of Gauss points, the oracle of these tests. */
-final class SurfaceSums {
+public final class SurfaceSums {
   private static final int POINTS = 64;
   private static final GaussIntegrator RULE =
       new GaussIntegratorFactory().legendre(POINTS, 0.0, 1.0);
@@ -44,7 +44,7 @@ final class SurfaceSums {
   }
 
   /** ∬ (r − p)·n dS / 3: the volume of the cones from p to the surface. */
-  static double volume(Surface surface, Map<String, Double> parameters, Vector3 p) {
+  public static double volume(Surface surface, Map<String, Double> parameters, Vector3 p) {
     return integral(surface, parameters, point -> point.position().minus(p).dot(point.areaVector()))
         / 3;
   }
