@@ -1,7 +1,5 @@
 package org.hullsum.audit;
 
-import java.util.stream.IntStream;
-import org.hullsum.closure.FacingFinder;
 import org.hullsum.model.Case;
 
 /**
@@ -15,10 +13,6 @@ public final class Auditor {
 
   /** The balances of a case, what is wrong with it, and what would explain what does not close. */
   public static CaseResult audit(Case audited, AuditOptions options) {
-    return new CaseAudit(audited, options)
-        .run(
-            surfaces ->
-                new FacingFinder(surfaces, audited.inputs().values())
-                    .find(IntStream.range(0, surfaces.size()).boxed().toList()));
+    return new CaseAudit(audited, options).run();
   }
 }

@@ -8,6 +8,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
+import org.hullsum.closure.VolumeFacings;
 import org.hullsum.flux.InputSensitivity;
 import org.hullsum.model.Case;
 import org.hullsum.model.Envelope;
@@ -44,9 +45,9 @@ final class CaseAudit {
             : stated.stream().map(OptionalDouble::of).toList();
   }
 
-  CaseResult run(SurfaceInspection.Finder finder) {
+  CaseResult run() {
     List<PatchAudit> patches = integratePatches();
-    List<SurfaceAudit> surfaces = inspectSurfaces(patches, finder);
+    List<SurfaceAudit> surfaces = inspectSurfaces(patches);
     FacingAudit facings = new FacingAudit(patches, surfaces);
     List<SingularityAudit> onPatches = inspectPatches(patches);
     List<SingularityAudit> inVolumes = inspectVolumes(surfaces);
@@ -72,7 +73,7 @@ final class CaseAudit {
         audited.notes(),
         balances,
         new PatchReport(audited, scales, facings).results(patches),
-        surfaces.stream().map(s -> s.result(scales, gapFlux(gaps, s))).toList(),
+        surfaces.stream().map(s -> s.result(scales, gapFluxes(gaps, s))).toList(),
         Waivers.apply(findings.inOrder(), audited.waivers(), options.today()),
         explained.explanations(),
         explained.fitByChance(),
@@ -85,11 +86,11 @@ final class CaseAudit {
     return workers.map("patches", patches.size(), i -> integration.integrate(patches.get(i)));
   }
 
-  private List<SurfaceAudit> inspectSurfaces(
-      List<PatchAudit> patches, SurfaceInspection.Finder finder) {
-    SurfaceInspection inspection = new SurfaceInspection(patches, finder);
+  private List<SurfaceAudit> inspectSurfaces(List<PatchAudit> patches) {
+    SurfaceInspection inspection = new SurfaceInspection(patches, inputs.values());
     List<Volume> volumes = audited.volumes();
-    return workers.map("surfaces", volumes.size(), i -> inspection.inspect(volumes.get(i)));
+    return inspection.judge(
+        workers.map("surfaces", volumes.size(), i -> inspection.sew(volumes.get(i))));
   }
 
   private List<SingularityAudit> inspectPatches(List<PatchAudit> patches) {
@@ -155,10 +156,11 @@ final class CaseAudit {
     return gaps;
   }
 
-  private static Optional<Double> gapFlux(
+  private static List<Double> gapFluxes(
       Map<String, GapIntegration.GapAudit> gaps, SurfaceAudit surface) {
     return Optional.ofNullable(gaps.get(surface.volume().name()))
-        .map(g -> g.outward().get(0).value());
+        .map(GapIntegration.GapAudit::fluxes)
+        .orElse(List.of());
   }
 
   private void gather(
@@ -243,17 +245,12 @@ final class CaseAudit {
     for (SurfaceAudit surface : surfaces) {
       surface.openReason().ifPresent(reason -> open.add(surface.volume().name()));
       surface.bare().ifPresent(b -> surfaceless.add(surface.volume().name()));
-      surface
-          .facings()
-          .ifPresent(
-              f ->
-                  f.overlaps()
-                      .forEach(
-                          o ->
-                              overlaps.add(
-                                  new Clues.Overlap(
-                                      surface.patches().get(o.first()).name(),
-                                      surface.patches().get(o.second()).name()))));
+      for (VolumeFacings.Overlap overlap : surface.facings().overlaps()) {
+        overlaps.add(
+            new Clues.Overlap(
+                surface.patches().get(overlap.first()).name(),
+                surface.patches().get(overlap.second()).name()));
+      }
     }
     Clues clues =
         new Clues(facings.inward(), surfaced, overlaps, open, surfaceless, gapClues, fields);

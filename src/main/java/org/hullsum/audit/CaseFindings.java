@@ -6,7 +6,9 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import org.hullsum.closure.MomentClosure;
+import java.util.stream.Collectors;
+import org.hullsum.closure.Gap;
+import org.hullsum.closure.Seam;
 import org.hullsum.closure.VolumeFacings;
 import org.hullsum.flux.PatchFlux;
 import org.hullsum.model.Claim;
@@ -22,6 +24,9 @@ import org.hullsum.quadrature.Integral;
 
 /** The findings on patches, surfaces, interiors and balances. */
 final class CaseFindings {
+  /** Gaps that one message tells; the others are in the surface's own list. */
+  private static final int MOST_GAPS_TOLD = 3;
+
   private final Scales scales;
   private final List<Finding> findings = new ArrayList<>();
 
@@ -155,11 +160,15 @@ final class CaseFindings {
           volume.place(),
           Map.of());
     }
-    surface.facings().ifPresent(f -> f.overlaps().forEach(o -> addOverlap(surface, o)));
-    boolean overlapping = surface.overlaps();
-    if (surface.openReason().isPresent() && !overlapping) {
+    surface.facings().overlaps().forEach(o -> addOverlap(surface, o));
+    if (surface.facings().overlaps().isEmpty()) {
+      surface.sewn().seams().seams().stream()
+          .filter(Seam::isCrowded)
+          .forEach(seam -> addCrowded(surface, seam));
+    }
+    if (!surface.gaps().isEmpty()) {
       addOpen(surface);
-    } else if (surface.bare().isEmpty() && !overlapping) {
+    } else if (surface.bare().isEmpty() && !surface.overlaps()) {
       surface.undeterminedReason().ifPresent(reason -> addUndetermined(surface, reason));
     }
   }
@@ -184,6 +193,28 @@ final class CaseFindings {
         evidence);
   }
 
+  private void addCrowded(SurfaceAudit surface, Seam seam) {
+    List<String> names = names(surface, seam.patches());
+    add(
+        FindingCode.SURFACE_OVERLAP,
+        "along one edge of "
+            + Figures.text(scales.length() * seam.length(), scales.lengthUnit())
+            + " meet "
+            + seam.sides().size()
+            + " rims of `"
+            + surface.volume().name()
+            + "`, of "
+            + String.join(", ", names)
+            + "; a closed surface has two along each edge, so one is too many or belongs inside",
+        surface.volume().name(),
+        surface.volume().place(),
+        Map.of("patches", names));
+  }
+
+  private static List<String> names(SurfaceAudit surface, List<Integer> patches) {
+    return patches.stream().map(p -> surface.patches().get(p).name()).toList();
+  }
+
   private void addOpen(SurfaceAudit surface) {
     Map<String, Object> evidence = new LinkedHashMap<>();
     if (surface.determined()) {
@@ -193,25 +224,41 @@ final class CaseFindings {
               c ->
                   evidence.put("closureVector", coordinates(scales.vectorArea(c.closureVector()))));
     }
-    String where = "";
-    if (surface.gap().isPresent()) {
-      MomentClosure.PlaneGap gap = surface.gap().get();
-      double area = scales.area(gap.vectorArea().norm());
-      evidence.put("gapCentre", coordinates(scales.point(gap.centre())));
-      evidence.put("gapArea", area);
-      where =
-          "; one plane opening of "
-              + Figures.text(area, scales.areaUnit())
-              + " around "
-              + scales.place(gap.centre())
-              + " would explain it";
-    }
+    List<Gap> gaps = surface.gaps();
+    evidence.put("gaps", gaps.size());
+    String told =
+        gaps.stream()
+            .limit(MOST_GAPS_TOLD)
+            .map(g -> described(surface, g))
+            .collect(Collectors.joining("; "));
+    String more =
+        gaps.size() > MOST_GAPS_TOLD ? "; and " + (gaps.size() - MOST_GAPS_TOLD) + " more" : "";
     add(
         FindingCode.SURFACE_OPEN,
-        surface.openReason().orElseThrow() + where,
+        surface.openReason().orElseThrow() + ": " + told + more,
         surface.volume().name(),
         surface.volume().place(),
         evidence);
+  }
+
+  /** A gap's rim: on what, how long, where. */
+  private String described(SurfaceAudit surface, Gap gap) {
+    List<String> on =
+        gap.patches().stream().map(p -> "`" + surface.patches().get(p).name() + "`").toList();
+    String rim =
+        (gap.whole() ? "a rim of " : "an edge of ")
+            + String.join(" and ", on)
+            + ", "
+            + Figures.text(scales.length() * gap.length(), scales.lengthUnit())
+            + " long around "
+            + scales.place(gap.centre())
+            + ", meets no other patch";
+    return gap.lying() == Gap.NONE
+        ? rim
+        : rim
+            + " but lies on the inside of `"
+            + surface.patches().get(gap.lying()).name()
+            + "`, which wants an opening there (`trim`)";
   }
 
   /** Nothing is proved of such a surface, so it weighs less than one that is shown to be open. */

@@ -41,12 +41,12 @@ record Clues(
   }
 
   /**
-   * The one plane gap that the moments give.
+   * The gaps in a surface.
    *
-   * @param described its area and place, with units
-   * @param area in SI
-   * @param between the patches at its rim, where they are known
-   * @param flux outward through a plane disk over it
+   * @param described their areas and places, with units
+   * @param area of all, in SI
+   * @param between the patches on their rims
+   * @param flux outward through plane patches over them
    * @param residualThen the residual of the balance with that flux; empty where it can't be said
    * @param slack numerical error of the flux
    */

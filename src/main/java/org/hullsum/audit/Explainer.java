@@ -85,9 +85,9 @@ final class Explainer {
                     Optional.of(g.area()),
                     g.residualThen().get(),
                     g.slack(),
-                    "By its moments the surface has an opening of "
+                    "The surface has "
                         + g.described()
-                        + "; a plane patch over it would carry "
+                        + "; plane patches over its rims would carry "
                         + Figures.text(g.flux().orElse(0.0), balance.result().unit())
                         + " outward."));
   }

@@ -5,7 +5,8 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
-import org.hullsum.closure.MomentClosure;
+import java.util.stream.Collectors;
+import org.hullsum.closure.Gap;
 import org.hullsum.expression.Expression;
 import org.hullsum.expression.VectorExpression;
 import org.hullsum.flux.BoundaryPatch;
@@ -24,13 +25,13 @@ import org.hullsum.model.StatedFlux;
 import org.hullsum.problem.InternalFault;
 
 /**
- * What would pass through the plane gap that the moments of an open surface give.
+ * What would pass through the gaps of an open surface.
  *
- * <p>The moments give the gap's vector area and centre, not its outline. It is taken for a disk of
- * that area, which is exact for a field that is linear over the gap whatever the outline.
+ * <p>Over each rim a disk is laid that has the vector area and the centre of the fan over it, which
+ * is exact for a plane gap and a field that is linear over it, whatever the outline.
  */
 final class GapIntegration {
-  /** What the gap's unknown outline and the error of its moments may do, of the throughput. */
+  /** What the gaps' outlines may do, of the throughput. */
   private static final double GAP_ERROR = 1e-6;
 
   private final InputSensitivity inputs;
@@ -53,17 +54,27 @@ final class GapIntegration {
   /**
    * What would pass through and be made, by the instant, in the rate unit.
    *
-   * @param gap in working units
-   * @param outward flux through the disk
-   * @param divergence of the same fields in the region that the disk closes
+   * @param gaps in working units
+   * @param between the names of the patches on their rims
+   * @param fluxes outward through each, at the first instant
+   * @param outward flux through all disks
+   * @param divergence of the same fields in the region that the disks close
    */
-  record GapAudit(MomentClosure.PlaneGap gap, List<Estimate> outward, List<Estimate> divergence) {
+  record GapAudit(
+      List<Gap> gaps,
+      List<String> between,
+      List<Double> fluxes,
+      List<Estimate> outward,
+      List<Estimate> divergence) {
     GapAudit {
+      gaps = List.copyOf(gaps);
+      between = List.copyOf(between);
+      fluxes = List.copyOf(fluxes);
       outward = List.copyOf(outward);
       divergence = List.copyOf(divergence);
     }
 
-    /** For the explanation of one balance; the residual then, with the gap closed by the disk. */
+    /** For the explanation of one balance; the residual then, with the gaps closed by disks. */
     Clues.Gap clue(BalanceSheet.Drawn drawn, int index, Scales scales) {
       Balance balance = drawn.balances().get(index);
       Estimate flux = drawn.at(index, outward);
@@ -74,29 +85,38 @@ final class GapIntegration {
               ? balance.result().outward().map(o -> o + flux.value() - made.value())
               : balance.residual().map(r -> r.value() + flux.value());
       double slack = flux.error() + (identity ? made.error() : 0);
-      double area = scales.area(gap.vectorArea().norm());
+      double area = scales.area(gaps.stream().mapToDouble(g -> g.vectorArea().norm()).sum());
+      String places =
+          gaps.stream().map(g -> scales.place(g.centre())).collect(Collectors.joining(" and "));
       return new Clues.Gap(
-          Figures.text(area, scales.areaUnit()) + " around " + scales.place(gap.centre()),
+          (gaps.size() == 1 ? "an opening of " : gaps.size() + " openings, together ")
+              + Figures.text(area, scales.areaUnit())
+              + ", around "
+              + places,
           area,
-          List.of(),
+          between,
           Optional.of(flux.value()),
           then,
           slack + GAP_ERROR * balance.result().throughput());
     }
   }
 
-  /** Empty where there is no single plane gap, no field to pass it, or no finite figure. */
+  /** Empty where there is no gap with a whole rim, no field to pass it, or no finite figure. */
   Optional<GapAudit> integrate(SurfaceAudit audit, List<FieldUse.Carrier> carriers) {
-    if (audit.gap().isEmpty() || carriers.isEmpty()) {
+    List<Gap> gaps = audit.gaps();
+    boolean whole = gaps.stream().allMatch(g -> g.whole() && g.vectorArea().norm() > 0);
+    if (gaps.isEmpty() || !whole || carriers.isEmpty() || audit.signs().isEmpty()) {
       return Optional.empty();
     }
-    MomentClosure.PlaneGap gap = audit.gap().get();
-    PulledBackSurface disk = PulledBackSurface.of(disk(gap));
     List<BoundaryPatch> closed = new ArrayList<>(audit.boundary());
-    closed.add(new BoundaryPatch(disk, PatchGeometry.of(disk, inputs.values(), digits), 1));
+    List<PreparedFlux> prepared = new ArrayList<>();
+    for (Gap gap : gaps) {
+      PulledBackSurface disk = PulledBackSurface.of(disk(gap));
+      closed.add(new BoundaryPatch(disk, PatchGeometry.of(disk, inputs.values(), digits), 1));
+      carriers.forEach(c -> prepared.add(fluxes.prepare(Optional.of(disk), stated(c, audit))));
+    }
     Expression density = InteriorIntegration.density(carriers);
-    List<PreparedFlux> prepared =
-        carriers.stream().map(c -> fluxes.prepare(Optional.of(disk), stated(c, audit))).toList();
+    List<Double> through = new ArrayList<>();
     List<Estimate> outward = new ArrayList<>();
     List<Estimate> divergence = new ArrayList<>();
     for (int i = 0; i < instants.size(); i++) {
@@ -109,11 +129,21 @@ final class GapIntegration {
       if (parts.size() < prepared.size() || inside.value().isEmpty()) {
         return Optional.empty();
       }
+      for (int k = 0; i == 0 && k < gaps.size(); k++) {
+        int first = k * carriers.size();
+        through.add(Estimate.sum(parts.subList(first, first + carriers.size())).value());
+      }
       outward.add(Estimate.sum(parts));
       divergence.add(
           new Estimate(inside.value().get(), inside.errorBound(), Map.of()).times(scales.rate()));
     }
-    return Optional.of(new GapAudit(gap, outward, divergence));
+    List<String> between =
+        gaps.stream()
+            .flatMap(g -> g.patches().stream())
+            .distinct()
+            .map(p -> audit.patches().get(p).name())
+            .toList();
+    return Optional.of(new GapAudit(gaps, between, through, outward, divergence));
   }
 
   private static StatedFlux stated(FieldUse.Carrier carrier, SurfaceAudit audit) {
@@ -124,10 +154,10 @@ final class GapIntegration {
         audit.volume().place());
   }
 
-  private static Surface disk(MomentClosure.PlaneGap gap) {
+  private static Surface disk(Gap gap) {
     DiskShape shape =
         new DiskShape(
-            VectorExpression.of(gap.centre()),
+            VectorExpression.of(gap.fanCentre()),
             gap.vectorArea(),
             Expression.number(Math.sqrt(gap.vectorArea().norm() / Math.PI)),
             Optional.empty(),

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
+import org.hullsum.closure.PatchRims;
 import org.hullsum.flux.FluxBasis;
 import org.hullsum.flux.PatchFlux;
 import org.hullsum.flux.PatchGeometry;
@@ -17,6 +18,7 @@ import org.hullsum.quadrature.Integral;
  * @param patch of the case
  * @param surface made ready for integration
  * @param geometry for the construction normal, in working units
+ * @param rims its boundary, where there is a surface
  * @param sign of the declared facing against the construction normal; 0 where it can't be told; +1
  *     without a surface
  * @param degenerate why the patch is no surface, or has no facing
@@ -29,6 +31,7 @@ record PatchAudit(
     Patch patch,
     Optional<PulledBackSurface> surface,
     Optional<PatchGeometry> geometry,
+    Optional<PatchRims> rims,
     int sign,
     Optional<String> degenerate,
     List<List<PatchFlux>> fluxes,
@@ -37,6 +40,7 @@ record PatchAudit(
     Objects.requireNonNull(patch, "patch");
     Objects.requireNonNull(surface, "surface");
     Objects.requireNonNull(geometry, "geometry");
+    Objects.requireNonNull(rims, "rims");
     Objects.requireNonNull(degenerate, "degenerate");
     fluxes = List.copyOf(fluxes);
     claims = List.copyOf(claims);

@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
 import java.util.OptionalDouble;
+import org.hullsum.closure.PatchRims;
 import org.hullsum.flux.FluxIntegrator;
 import org.hullsum.flux.FluxIntegrator.PreparedFlux;
 import org.hullsum.flux.InputSensitivity;
@@ -53,6 +54,7 @@ final class PatchIntegration {
         patch,
         surface,
         geometry,
+        patch.surface().map(boundary -> PatchRims.of(boundary, inputs.values())),
         sign,
         degenerate,
         noArea.isPresent() ? withoutArea(patch) : fluxes(patch, surface),

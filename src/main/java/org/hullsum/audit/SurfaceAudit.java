@@ -5,54 +5,81 @@ import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
 import org.hullsum.closure.FoundFacing;
+import org.hullsum.closure.Gap;
 import org.hullsum.closure.MomentClosure;
+import org.hullsum.closure.Seam;
 import org.hullsum.closure.VolumeFacings;
 import org.hullsum.flux.BoundaryPatch;
 import org.hullsum.flux.PatchFlux;
 import org.hullsum.model.Volume;
-import org.hullsum.numeric.Vector3;
 
 /**
  * The surface of one volume, inspected.
  *
- * @param volume whose surface
- * @param patches that leave or enter it and have a surface with an area, baffles not among them, in
- *     the order of the case
- * @param bare the name of a patch without surface, where there is one
- * @param bounded whether any patch leaves or enters it
- * @param facings of the patches, in their order; empty where there are none
+ * @param sewn its patches and seams
+ * @param facings of the patches, in their order, by lines and seams together
  * @param signs of the construction normals, +1 outward, as found; else, for explanations only, as
  *     leaned to or declared; empty where one has none
- * @param closure with those signs
- * @param open whether the necessary conditions fail: with the facings found, or with any
+ * @param closure with those signs; empty without patches
+ * @param offered patches whose turning would make the normals of an open surface agree
  */
 record SurfaceAudit(
-    Volume volume,
-    List<PatchAudit> patches,
-    Optional<String> bare,
-    boolean bounded,
-    Optional<VolumeFacings> facings,
+    SewnSurface sewn,
+    VolumeFacings facings,
     Optional<List<Integer>> signs,
     Optional<MomentClosure> closure,
-    boolean open) {
+    List<String> offered) {
   SurfaceAudit {
-    Objects.requireNonNull(volume, "volume");
-    Objects.requireNonNull(bare, "bare");
+    Objects.requireNonNull(sewn, "sewn");
     Objects.requireNonNull(facings, "facings");
     signs = signs.map(List::copyOf);
     Objects.requireNonNull(closure, "closure");
-    patches = List.copyOf(patches);
+    offered = List.copyOf(offered);
+  }
+
+  Volume volume() {
+    return sewn.volume();
+  }
+
+  List<PatchAudit> patches() {
+    return sewn.patches();
+  }
+
+  Optional<String> bare() {
+    return sewn.bare();
+  }
+
+  boolean bounded() {
+    return sewn.bounded();
+  }
+
+  /** Whether a rim meets no other, or more than one. */
+  boolean open() {
+    return !sewn.seams().close() || overlaps();
+  }
+
+  /** True where the seams close and nothing contradicts them, false where they do not. */
+  Optional<Boolean> closed() {
+    if (bare().isPresent() || patches().isEmpty()) {
+      return Optional.empty();
+    }
+    if (open()) {
+      return Optional.of(false);
+    }
+    return determined() && closure.filter(MomentClosure::holds).isPresent()
+        ? Optional.of(true)
+        : Optional.empty();
   }
 
   boolean determined() {
-    return facings.filter(VolumeFacings::determined).isPresent();
+    return facings.determined() && !patches().isEmpty();
   }
 
   /** What was found of a patch, by its name. */
   Optional<FoundFacing> facingOf(String patch) {
-    for (int i = 0; facings.isPresent() && i < patches.size(); i++) {
-      if (patches.get(i).name().equals(patch)) {
-        return Optional.of(facings.get().facings().get(i));
+    for (int i = 0; i < patches().size(); i++) {
+      if (patches().get(i).name().equals(patch)) {
+        return Optional.of(facings.facings().get(i));
       }
     }
     return Optional.empty();
@@ -60,26 +87,34 @@ record SurfaceAudit(
 
   /** Why the surface is open, where that was proved. */
   Optional<String> openReason() {
-    if (!open || bare.isPresent()) {
+    if (!open() || bare().isPresent()) {
       return Optional.empty();
     }
     return Optional.of(
         "the surface of `"
-            + volume.name()
-            + (overlaps() ? "` does not close once: patches lie on one another" : "` is open"));
+            + volume().name()
+            + (sewn.seams().gaps().isEmpty()
+                ? "` does not close once: more than two patches meet along an edge"
+                : "` is open"));
   }
 
   /** Why no region is enclosed, so that no volume integral can be taken. */
   Optional<String> noRegion() {
-    if (!bounded) {
-      return Optional.of("no patch bounds `" + volume.name() + "`");
+    if (!bounded()) {
+      return Optional.of("no patch bounds `" + volume().name() + "`");
     }
-    if (patches.isEmpty()) {
-      return Optional.of("no patch of `" + volume.name() + "` has a surface");
+    if (patches().isEmpty()) {
+      return Optional.of("no patch of `" + volume().name() + "` has a surface");
     }
-    if (open) {
-      return bare.map(
-              b -> "the surfaces of `" + volume.name() + "` do not close, and `" + b + "` has none")
+    if (open()) {
+      return bare()
+          .map(
+              b ->
+                  "the surfaces of `"
+                      + volume().name()
+                      + "` do not close, and `"
+                      + b
+                      + "` has none")
           .or(this::openReason);
     }
     return undeterminedReason();
@@ -87,24 +122,22 @@ record SurfaceAudit(
 
   /** Why a facing is undetermined, of the first such patch. */
   Optional<String> undeterminedReason() {
-    return facings.flatMap(
-        f ->
-            f.facings().stream()
-                .filter(found -> found.reason().isPresent())
-                .findFirst()
-                .map(
-                    found ->
-                        "which way `"
-                            + patches.get(found.patch()).name()
-                            + "` faces is undetermined: "
-                            + found.reason().get().words()));
+    return facings.facings().stream()
+        .filter(found -> found.reason().isPresent())
+        .findFirst()
+        .map(
+            found ->
+                "which way `"
+                    + patches().get(found.patch()).name()
+                    + "` faces is undetermined: "
+                    + found.reason().get().words());
   }
 
   /** The boundary with those signs. */
   List<BoundaryPatch> boundary() {
     List<BoundaryPatch> boundary = new ArrayList<>();
-    for (int i = 0; i < patches.size(); i++) {
-      PatchAudit patch = patches.get(i);
+    for (int i = 0; i < patches().size(); i++) {
+      PatchAudit patch = patches().get(i);
       boundary.add(
           new BoundaryPatch(
               patch.surface().orElseThrow(),
@@ -120,7 +153,7 @@ record SurfaceAudit(
    */
   double enough(int instant, int digits) {
     double flowing = 0;
-    for (PatchAudit patch : patches) {
+    for (PatchAudit patch : patches()) {
       for (PatchFlux flux : patch.fluxes().get(instant)) {
         flowing += 0.5 * flux.magnitude();
       }
@@ -128,57 +161,62 @@ record SurfaceAudit(
     return Double.isFinite(flowing) ? Math.pow(10, -digits) * flowing : 0;
   }
 
-  /** For the reports; the flux through a gap where it is known. */
-  SurfaceResult result(Scales scales, Optional<Double> gapFlux) {
+  /**
+   * For the reports.
+   *
+   * @param gapFluxes through the gaps, in their order; none where not known
+   */
+  SurfaceResult result(Scales scales, List<Double> gapFluxes) {
     Optional<MomentClosure> found = determined() ? closure : Optional.empty();
-    Optional<Vector3> vector = found.map(c -> scales.vectorArea(c.closureVector()));
-    Optional<List<Double>> moments =
-        found.map(c -> c.moments().stream().map(scales::volume).toList());
-    List<SurfaceResult.Gap> gaps =
-        gap().stream()
-            .map(
-                g ->
-                    new SurfaceResult.Gap(
-                        List.of(),
-                        Optional.empty(),
-                        scales.point(g.centre()),
-                        scales.area(g.vectorArea().norm()),
-                        gapFlux))
-            .toList();
+    List<SurfaceResult.Gap> gaps = new ArrayList<>();
+    for (int k = 0; k < gaps().size(); k++) {
+      Gap gap = gaps().get(k);
+      gaps.add(
+          new SurfaceResult.Gap(
+              gap.patches().stream().map(p -> patches().get(p).name()).toList(),
+              scales.length() * gap.length(),
+              scales.point(gap.centre()),
+              scales.area(gap.vectorArea().norm()),
+              k < gapFluxes.size() ? Optional.of(gapFluxes.get(k)) : Optional.empty()));
+    }
     return new SurfaceResult(
-        volume.name(),
-        open && bare.isEmpty() ? Optional.of(false) : Optional.empty(),
-        Optional.of(reason()),
-        Optional.empty(),
-        vector,
-        open ? Optional.empty() : found.flatMap(c -> c.enclosedVolume()).map(scales::volume),
-        moments,
+        volume().name(),
+        closed(),
+        reason(),
+        patches().isEmpty() || bare().isPresent()
+            ? Optional.empty()
+            : Optional.of(sewn.shells().size()),
+        found.map(c -> scales.vectorArea(c.closureVector())),
+        open() ? Optional.empty() : found.flatMap(c -> c.enclosedVolume()).map(scales::volume),
+        found.map(c -> c.moments().stream().map(scales::volume).toList()),
         gaps);
   }
 
-  /** Whether patches of it were seen to lie on one another. */
+  /** Whether patches of it were seen to lie on one another, or more than two to share an edge. */
   boolean overlaps() {
-    return facings.filter(f -> !f.overlaps().isEmpty()).isPresent();
+    return !facings.overlaps().isEmpty() || sewn.seams().seams().stream().anyMatch(Seam::isCrowded);
   }
 
-  /** The plane gap that the moments give, where no patch is missing, or there twice, anyway. */
-  Optional<MomentClosure.PlaneGap> gap() {
-    return open && bare.isEmpty() && !overlaps()
-        ? closure.flatMap(MomentClosure::gap)
-        : Optional.empty();
+  /** The holes, where no patch without surface may fill them. */
+  List<Gap> gaps() {
+    return bare().isEmpty() ? sewn.seams().gaps() : List.of();
   }
 
-  private String reason() {
-    if (!bounded) {
-      return "not applicable: no patch bounds it";
+  private Optional<String> reason() {
+    if (!bounded()) {
+      return Optional.of("not applicable: no patch bounds it");
     }
-    if (bare.isPresent()) {
-      return "not applicable: `" + bare.get() + "` has no surface";
+    if (bare().isPresent()) {
+      return Optional.of("not applicable: `" + bare().get() + "` has no surface");
     }
-    if (open) {
-      return "∬ n dS and ∬ r⊗n dS do not have the values that every closed surface has";
-    }
-    return undeterminedReason()
-        .orElse("∬ n dS and ∬ r⊗n dS are those of a closed surface, as some open ones have too");
+    return openReason()
+        .or(this::undeterminedReason)
+        .or(
+            () ->
+                closed().isPresent()
+                    ? Optional.empty()
+                    : Optional.of(
+                        "its rims meet, yet ∬ n dS and ∬ r⊗n dS are not those of a closed"
+                            + " surface"));
   }
 }

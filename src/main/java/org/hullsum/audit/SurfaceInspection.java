@@ -2,33 +2,41 @@ package org.hullsum.audit;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
+import java.util.stream.IntStream;
+import org.hullsum.closure.FacingFinder;
 import org.hullsum.closure.FoundFacing;
 import org.hullsum.closure.FoundFacing.Side;
 import org.hullsum.closure.MomentClosure;
+import org.hullsum.closure.OrientationSystem;
+import org.hullsum.closure.SeamFinder;
+import org.hullsum.closure.Seams;
+import org.hullsum.closure.ShellFinder;
 import org.hullsum.closure.SurfaceMoments;
 import org.hullsum.closure.VolumeFacings;
 import org.hullsum.flux.PatchGeometry;
-import org.hullsum.geometry.Surface;
 import org.hullsum.model.Patch;
 import org.hullsum.model.Volume;
+import org.hullsum.numeric.Vector3;
 
-/** Inspects the surfaces of volumes: facings by parity, necessary conditions of closedness. */
+/**
+ * Inspects the surfaces of volumes: which way their patches face, twice over, by lines and by
+ * seams, and whether they close.
+ *
+ * <p>Each volume is first looked at by itself, with {@link #sew}; the seams of all of them together
+ * then tell sides too, {@link #judge}.
+ */
 final class SurfaceInspection {
-  /** Finds the facings of the surfaces of one volume; none of it looks at what is declared. */
-  interface Finder {
-    VolumeFacings find(List<Surface> surfaces);
-  }
-
   private final List<PatchAudit> all;
-  private final Finder finder;
+  private final Map<String, Double> parameters;
 
-  SurfaceInspection(List<PatchAudit> all, Finder finder) {
+  SurfaceInspection(List<PatchAudit> all, Map<String, Double> parameters) {
     this.all = List.copyOf(all);
-    this.finder = finder;
+    this.parameters = parameters;
   }
 
-  SurfaceAudit inspect(Volume volume) {
+  SewnSurface sew(Volume volume) {
     List<PatchAudit> surfaced = new ArrayList<>();
     Optional<String> bare = Optional.empty();
     boolean bounded = false;
@@ -44,78 +52,100 @@ final class SurfaceInspection {
         surfaced.add(audit);
       }
     }
-    if (surfaced.isEmpty()) {
-      return new SurfaceAudit(
-          volume,
-          surfaced,
-          bare,
-          bounded,
-          Optional.empty(),
-          Optional.empty(),
-          Optional.empty(),
-          false);
-    }
-    VolumeFacings facings =
-        finder.find(surfaced.stream().map(p -> p.patch().surface().orElseThrow()).toList());
-    List<SurfaceMoments> moments = surfaced.stream().map(SurfaceInspection::moments).toList();
-    Optional<List<Integer>> signs = signs(facings, surfaced, volume);
-    Optional<MomentClosure> closure =
-        signs.map(s -> MomentClosure.of(moments, s, MomentClosure.USUAL_SLACK));
-    boolean open =
-        facings.determined()
-            ? closure.filter(c -> !c.holds()).isPresent()
-            : failsWhateverTheRest(facings, moments);
-    return new SurfaceAudit(
-        volume, surfaced, bare, bounded, Optional.of(facings), signs, closure, open);
+    FacingFinder finder =
+        new FacingFinder(
+            surfaced.stream().map(p -> p.patch().surface().orElseThrow()).toList(), parameters);
+    VolumeFacings byLines = finder.find(IntStream.range(0, surfaced.size()).boxed().toList());
+    int[] signs = byLines.facings().stream().mapToInt(SurfaceInspection::sign).toArray();
+    Seams seams =
+        new SeamFinder(surfaced.stream().map(p -> p.rims().orElseThrow()).toList()).find(signs);
+    return new SewnSurface(
+        volume,
+        surfaced,
+        bare,
+        bounded,
+        byLines,
+        finder.placed(seams),
+        ShellFinder.shells(surfaced.size(), seams, volumes(surfaced), finder::encloses));
   }
 
   private static boolean touches(Patch patch, String volume) {
     return patch.leaves().equals(volume) || patch.enters().equals(volume);
   }
 
+  /** Of the construction normal as found or leaned to; 0 where there is neither. */
+  private static int sign(FoundFacing facing) {
+    Optional<Side> side =
+        facing.side() == Side.UNDETERMINED ? facing.leaning() : Optional.of(facing.side());
+    return side.map(Side::sign).orElse(0);
+  }
+
+  /**
+   * ⅓ ∬ (r − q) · n dS of each patch by its construction normal, q in the middle of one of them.
+   */
+  private static double[] volumes(List<PatchAudit> patches) {
+    double[] volumes = new double[patches.size()];
+    for (int k = 0; k < volumes.length; k++) {
+      PatchGeometry geometry = patches.get(k).geometry().orElseThrow();
+      Vector3 q = patches.get(0).geometry().orElseThrow().reference();
+      List<Double> moments = geometry.moments();
+      double trace = moments.get(0) + moments.get(4) + moments.get(8);
+      volumes[k] = (trace + geometry.reference().minus(q).dot(geometry.vectorArea())) / 3;
+    }
+    return volumes;
+  }
+
+  /** The volumes' surfaces, with the sides that the seams of all of them tell. */
+  List<SurfaceAudit> judge(List<SewnSurface> sewn) {
+    List<OrientationSystem.Part> parts = sewn.stream().map(s -> s.part(all)).toList();
+    OrientationSystem orientation = OrientationSystem.solve(all.size(), parts);
+    List<SurfaceAudit> judged = new ArrayList<>();
+    for (int v = 0; v < sewn.size(); v++) {
+      judged.add(judge(sewn.get(v), orientation, parts.get(v)));
+    }
+    return judged;
+  }
+
+  private SurfaceAudit judge(
+      SewnSurface sewn, OrientationSystem orientation, OrientationSystem.Part part) {
+    List<FoundFacing> facings = new ArrayList<>();
+    for (int k = 0; k < sewn.patches().size(); k++) {
+      int bySeams = orientation.side(part.patches().get(k)) * part.leaving().get(k);
+      facings.add(sewn.byLines().facings().get(k).confirmedBy(bySeams));
+    }
+    VolumeFacings found = new VolumeFacings(facings, sewn.byLines().overlaps());
+    Optional<List<Integer>> signs = signs(found, sewn);
+    List<SurfaceMoments> moments = sewn.patches().stream().map(SurfaceInspection::moments).toList();
+    double area = moments.stream().mapToDouble(SurfaceMoments::area).sum();
+    double slack = area > 0 ? sewn.seams().slackArea() / area : 0;
+    Optional<MomentClosure> closure =
+        sewn.patches().isEmpty()
+            ? Optional.empty()
+            : signs.map(s -> MomentClosure.of(moments, s, MomentClosure.USUAL_SLACK + slack));
+    List<String> offered =
+        OrientationSystem.fewestToTurn(part, sewn.patches().stream().map(p -> p.sign()).toList())
+            .stream()
+            .map(k -> all.get(k).name())
+            .toList();
+    return new SurfaceAudit(sewn, found, signs, closure, offered);
+  }
+
   /**
    * The sides found; where a patch has none, the one leaned to or declared, which serves nothing
    * but explanations. Empty where a patch has not even that.
    */
-  private static Optional<List<Integer>> signs(
-      VolumeFacings facings, List<PatchAudit> patches, Volume volume) {
+  private static Optional<List<Integer>> signs(VolumeFacings facings, SewnSurface sewn) {
     List<Integer> signs = new ArrayList<>();
-    for (int i = 0; i < patches.size(); i++) {
-      FoundFacing facing = facings.facings().get(i);
-      Optional<Side> side =
-          facing.side() == Side.UNDETERMINED ? facing.leaning() : Optional.of(facing.side());
-      PatchAudit patch = patches.get(i);
-      int declared = patch.patch().leaves().equals(volume.name()) ? patch.sign() : -patch.sign();
-      int sign = side.map(Side::sign).orElse(declared);
+    for (int i = 0; i < sewn.patches().size(); i++) {
+      PatchAudit patch = sewn.patches().get(i);
+      int found = sign(facings.facings().get(i));
+      int sign = found != 0 ? found : sewn.leaves(patch) ? patch.sign() : -patch.sign();
       if (sign == 0) {
         return Optional.empty();
       }
       signs.add(sign);
     }
     return Optional.of(signs);
-  }
-
-  /**
-   * Whether the conditions fail whichever way the undetermined patches face. On a closed surface
-   * the sides found are right, so those that were found need not be tried both ways.
-   */
-  private static boolean failsWhateverTheRest(VolumeFacings facings, List<SurfaceMoments> moments) {
-    List<SurfaceMoments> found = new ArrayList<>();
-    List<Integer> signs = new ArrayList<>();
-    List<SurfaceMoments> tried = new ArrayList<>();
-    for (int i = 0; i < moments.size(); i++) {
-      Side side = facings.facings().get(i).side();
-      if (side == Side.UNDETERMINED) {
-        tried.add(moments.get(i));
-      } else {
-        found.add(moments.get(i));
-        signs.add(side.sign());
-      }
-    }
-    if (!found.isEmpty()) {
-      tried.add(SurfaceMoments.sum(found, signs));
-    }
-    return MomentClosure.failsForEverySign(tried, MomentClosure.USUAL_SLACK).orElse(false);
   }
 
   private static SurfaceMoments moments(PatchAudit patch) {

@@ -9,8 +9,8 @@ import org.hullsum.numeric.Vector3;
  * What was found of the surface of one volume, in SI.
  *
  * @param volume its name
- * @param closed empty where closedness is not proved
- * @param reason why it is open, why nothing is proved, or why the question does not arise
+ * @param closed by the seams; empty where nothing is proved
+ * @param reason why it is not closed, why nothing is proved, or why the question does not arise
  * @param shells number of connected shells; empty where not known
  * @param closureVector ∬ n dS with the facings found
  * @param enclosedVolume empty where a facing is undetermined or the surface open
@@ -29,15 +29,15 @@ public record SurfaceResult(
   /**
    * A hole.
    *
-   * @param between the patches on its rim; empty where not known
-   * @param length of the rim; empty where not known
-   * @param centre of the rim; of the gap's area where only the moments locate it
+   * @param between the patches on its rim
+   * @param length of the rim
+   * @param centre of the rim
    * @param area magnitude of the vector area of the rim
    * @param fluxThrough outward flux that would pass through a plane over it, where a field is known
    */
   public record Gap(
       List<String> between,
-      Optional<Double> length,
+      double length,
       Vector3 centre,
       double area,
       Optional<Double> fluxThrough) {

@@ -5,6 +5,8 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalInt;
+import java.util.stream.IntStream;
 import org.hullsum.closure.FoundFacing.Reason;
 import org.hullsum.closure.FoundFacing.Side;
 import org.hullsum.closure.VolumeFacings.Overlap;
@@ -36,6 +38,9 @@ public final class FacingFinder {
   private static final int MANY_POINTS = 6;
 
   private static final int MANY_LINES = 8;
+
+  /** Points of a gap's rim that are looked for on other patches. */
+  private static final int RIM_POINTS = 5;
 
   /** Shares of odd lines that are a clear majority. */
   private static final double CLEAR = 0.75;
@@ -95,6 +100,73 @@ public final class FacingFinder {
     List<Overlap> found = new ArrayList<>();
     overlaps.forEach((pair, place) -> found.add(new Overlap(pair.get(0), pair.get(1), place)));
     return new VolumeFacings(facings, found);
+  }
+
+  /**
+   * Whether a patch lies within the surface that others form: on most lines from a point of it an
+   * odd number of crossings lies ahead.
+   */
+  public boolean encloses(List<Integer> shell, int patch) {
+    int inside = 0;
+    int kept = 0;
+    for (SamplePoint point : probe(patch).points(FEW_POINTS)) {
+      for (Vector3 direction : DIRECTIONS.subList(0, MANY_LINES)) {
+        OptionalInt ahead = ahead(shell, point, direction);
+        kept += ahead.isPresent() ? 1 : 0;
+        inside += ahead.isPresent() ? ahead.getAsInt() % 2 : 0;
+      }
+    }
+    return 2 * inside > kept;
+  }
+
+  /** Number of crossings ahead of a point; empty where one is doubtful. */
+  private OptionalInt ahead(List<Integer> shell, SamplePoint point, Vector3 direction) {
+    int ahead = 0;
+    for (int other : shell) {
+      Crossings found = probe(other).along(point.position(), direction);
+      if (!found.reliable()) {
+        return OptionalInt.empty();
+      }
+      for (Crossing crossing : found.crossings()) {
+        ahead += crossing.t() > 0 ? 1 : 0;
+      }
+    }
+    return OptionalInt.of(ahead);
+  }
+
+  /** The same seams, their gaps told with the patch on whose inside their rims lie. */
+  public Seams placed(Seams seams) {
+    List<Gap> gaps = new ArrayList<>();
+    for (Gap gap : seams.gaps()) {
+      gaps.add(gap.lyingOn(carrier(gap)));
+    }
+    return new Seams(seams.seams(), gaps, seams.slack(), seams.slackArea());
+  }
+
+  /** The patch that has every probed point of a rim on its inside. */
+  private int carrier(Gap gap) {
+    for (int patch = 0; patch < surfaces.size(); patch++) {
+      int tried = patch;
+      boolean on =
+          !gap.patches().contains(patch)
+              && IntStream.range(0, RIM_POINTS)
+                  .mapToObj(k -> gap.outline().get(k * gap.outline().size() / RIM_POINTS))
+                  .allMatch(p -> isOn(tried, p));
+      if (on) {
+        return patch;
+      }
+    }
+    return Gap.NONE;
+  }
+
+  private boolean isOn(int patch, Vector3 point) {
+    for (Vector3 direction : DIRECTIONS.subList(0, FEW_LINES)) {
+      Crossings found = probe(patch).along(point, direction);
+      if (PatchProbe.count(found, 2 * probe(patch).near()) > 0) {
+        return true;
+      }
+    }
+    return false;
   }
 
   private FoundFacing find(int patch, List<Integer> patches, Map<List<Integer>, Vector3> overlaps) {

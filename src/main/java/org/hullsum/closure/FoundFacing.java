@@ -48,6 +48,8 @@ public record FoundFacing(
     /** Each point has a side, and not all the same. */
     POINTS_AT_ODDS(
         "its points disagree: it runs through the volume's own surface, or is not orientable"),
+    /** Lines and seams contradict each other. */
+    SEAMS_AT_ODDS("lines through it and the seams with its neighbours contradict each other"),
     /** Too few lines could be followed with certainty. */
     NO_RELIABLE_LINE("no line through it could be followed with certainty");
 
@@ -69,6 +71,24 @@ public record FoundFacing(
     if (reason.isPresent() != (side == Side.UNDETERMINED)) {
       throw new IllegalArgumentException("a reason belongs to an undetermined side");
     }
+  }
+
+  /**
+   * The same, with what the seams say.
+   *
+   * @param sign +1 where they find the construction normal to point out of the volume, −1 into it,
+   *     0 where they do not tell
+   */
+  public FoundFacing confirmedBy(int sign) {
+    if (sign == 0 || (side != Side.UNDETERMINED && side.sign() == sign)) {
+      return this;
+    }
+    if (side == Side.UNDETERMINED) {
+      return new FoundFacing(
+          patch, sign > 0 ? Side.OUT : Side.IN, Optional.empty(), Optional.empty(), lines);
+    }
+    return new FoundFacing(
+        patch, Side.UNDETERMINED, Optional.of(Reason.SEAMS_AT_ODDS), Optional.empty(), lines);
   }
 
   /**

@@ -12,10 +12,8 @@ import org.hullsum.numeric.Vector3;
  * found for them.
  *
  * <p>For a closed outward surface A = ∬ n dS = 0 and M = ∬ r⊗n dS = V·I, by the divergence theorem.
- * Either failing proves the surface open; both holding proves nothing (a cube with six equal
- * centred holes passes). A surface that lacks one plane piece of vector area g with its centre at c
- * has A = −g and M = V·I − c⊗g, so that V = w·M w for every unit w square to g, and c = (V g − M
- * g)/|g|².
+ * Either failing proves that the surface is open or a sign wrong; both holding proves nothing (a
+ * cube with six equal centred holes passes). They confirm what the seams say, and give V.
  *
  * @param closureVector A
  * @param closureError a bound on the error of each component
@@ -23,7 +21,6 @@ import org.hullsum.numeric.Vector3;
  * @param momentsError a bound on the error of each
  * @param holds whether the necessary conditions hold within the error bounds
  * @param enclosedVolume V, where the conditions hold
- * @param gap the one plane gap that explains A and M, where they fail and it does
  */
 public record MomentClosure(
     Vector3 closureVector,
@@ -31,30 +28,13 @@ public record MomentClosure(
     List<Double> moments,
     double momentsError,
     boolean holds,
-    Optional<Double> enclosedVolume,
-    Optional<PlaneGap> gap) {
+    Optional<Double> enclosedVolume) {
   /** Mismatch that comes from rounded coordinates and is no gap, relative to the area. */
   public static final double USUAL_SLACK = 1e-9;
-
-  /** Up to this number of patches every choice of signs is tried: 2^19 of them. */
-  private static final int MOST_PATCHES_FOR_ALL_SIGNS = 20;
-
-  /** How well one plane gap must explain the moments, relative to |g| times the size. */
-  private static final double GAP_FIT = 1e-6;
-
-  /**
-   * The plane piece that is missing.
-   *
-   * @param vectorArea g, outward
-   * @param centre c, the centroid of the piece
-   * @param volume V with the piece in place
-   */
-  public record PlaneGap(Vector3 vectorArea, Vector3 centre, double volume) {}
 
   public MomentClosure {
     Objects.requireNonNull(closureVector, "closureVector");
     Objects.requireNonNull(enclosedVolume, "enclosedVolume");
-    Objects.requireNonNull(gap, "gap");
     moments = List.copyOf(moments);
   }
 
@@ -86,42 +66,7 @@ public record MomentClosure(
         aboutOrigin(total, frame.centre),
         frame.momentError + frame.centre.norm() * frame.vectorError,
         holds,
-        holds ? Optional.of(trace(total) / 3) : Optional.empty(),
-        holds ? Optional.empty() : frame.planeGap(total));
-  }
-
-  /**
-   * Whether the necessary conditions fail for every choice of signs, so that the surface is open
-   * whatever the facings; empty where there are too many patches to try.
-   */
-  public static Optional<Boolean> failsForEverySign(List<SurfaceMoments> patches, double slack) {
-    int n = patches.size();
-    if (n == 0 || n > MOST_PATCHES_FOR_ALL_SIGNS) {
-      return Optional.empty();
-    }
-    Frame frame = Frame.of(patches, slack);
-    double[] total = new double[12];
-    boolean[] turned = new boolean[n];
-    for (double[] row : frame.rows) {
-      add(total, row, 1);
-    }
-    for (int code = 1; code <= 1 << (n - 1); code++) {
-      if (frame.holds(total)) {
-        return Optional.of(false);
-      }
-      int next = Integer.numberOfTrailingZeros(code);
-      if (next < n - 1) {
-        turned[next] = !turned[next];
-        add(total, frame.rows[next], turned[next] ? -2 : 2);
-      }
-    }
-    return Optional.of(true);
-  }
-
-  private static void add(double[] total, double[] row, double factor) {
-    for (int k = 0; k < total.length; k++) {
-      total[k] = Math.fma(factor, row[k], total[k]);
-    }
+        holds ? Optional.of(trace(total) / 3) : Optional.empty());
   }
 
   private static double trace(double[] total) {
@@ -142,15 +87,12 @@ public record MomentClosure(
   private static final class Frame {
     private final Vector3 centre;
     private final double[][] rows;
-    private final double size;
     private final double vectorError;
     private final double momentError;
 
-    private Frame(
-        Vector3 centre, double[][] rows, double size, double vectorError, double momentError) {
+    private Frame(Vector3 centre, double[][] rows, double vectorError, double momentError) {
       this.centre = centre;
       this.rows = rows;
-      this.size = size;
       this.vectorError = vectorError;
       this.momentError = momentError;
     }
@@ -173,11 +115,7 @@ public record MomentClosure(
       Vector3 origin = centre;
       double[][] rows = patches.stream().map(p -> p.about(origin)).toArray(double[][]::new);
       return new Frame(
-          centre,
-          rows,
-          size,
-          vectorError + slack * totalArea,
-          momentError + slack * totalArea * size);
+          centre, rows, vectorError + slack * totalArea, momentError + slack * totalArea * size);
     }
 
     boolean holds(double[] total) {
@@ -200,41 +138,6 @@ public record MomentClosure(
         }
       }
       return true;
-    }
-
-    Optional<PlaneGap> planeGap(double[] total) {
-      Vector3 gap = new Vector3(-total[0], -total[1], -total[2]);
-      double area = gap.norm();
-      if (!(area > vectorError)) {
-        return Optional.empty();
-      }
-      Vector3 g = gap.times(1 / area);
-      Vector3 first = squareTo(g);
-      Vector3 second = g.cross(first);
-      double volume = 0.5 * (first.dot(product(total, first)) + second.dot(product(total, second)));
-      Vector3 offset = g.times(volume).minus(product(total, g)).times(1 / area);
-      double[] rest = total.clone();
-      for (int i = 0; i < 3; i++) {
-        for (int j = 0; j < 3; j++) {
-          rest[3 + 3 * i + j] += offset.component(i) * gap.component(j);
-        }
-      }
-      return isMultipleOfIdentity(rest, momentError + GAP_FIT * area * size)
-          ? Optional.of(new PlaneGap(gap, centre.plus(offset), volume))
-          : Optional.empty();
-    }
-
-    private static Vector3 squareTo(Vector3 g) {
-      Vector3 other = Math.abs(g.x()) < 0.6 ? Vector3.X : Vector3.Y;
-      return g.cross(other).unit();
-    }
-
-    private static Vector3 product(double[] total, Vector3 w) {
-      return new Vector3(row(total, 0, w), row(total, 1, w), row(total, 2, w));
-    }
-
-    private static double row(double[] total, int i, Vector3 w) {
-      return total[3 + 3 * i] * w.x() + total[4 + 3 * i] * w.y() + total[5 + 3 * i] * w.z();
     }
   }
 }

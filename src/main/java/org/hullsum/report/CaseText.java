@@ -163,7 +163,8 @@ final class CaseText {
         + " about "
         + Figures.vector(gap.centre())
         + (unit.equals("1") ? "" : " " + unit)
-        + gap.length().map(l -> ", rim " + Figures.quoted(l, unit)).orElse("")
+        + ", rim "
+        + Figures.quoted(gap.length(), unit)
         + gap.fluxThrough()
             .map(f -> ", outward flux through a plane over it " + Figures.quoted(f))
             .orElse("");

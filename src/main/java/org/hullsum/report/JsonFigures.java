@@ -169,7 +169,7 @@ final class JsonFigures {
     for (SurfaceResult.Gap gap : gaps) {
       json.beginObject();
       json.texts("between", gap.between());
-      json.optionalNumber("length", gap.length());
+      json.number("length", gap.length());
       json.optionalVector("centre", Optional.of(gap.centre()));
       json.number("area", gap.area());
       json.optionalNumber("fluxThrough", gap.fluxThrough());

@@ -7,7 +7,6 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.util.ArrayList;
 import java.util.Collections;
 import java.util.List;
-import java.util.Optional;
 import org.hullsum.numeric.Vector3;
 import org.junit.jupiter.api.Test;
 
@@ -60,26 +59,12 @@ class MomentClosureTest {
   }
 
   @Test
-  void missingFaceIsLocatedWithItsAreaAndCentre() {
-    List<SurfaceMoments> faces = box(new Vector3(-1, 2, 3), new Vector3(2, 3, 0.5));
-    SurfaceMoments lid = faces.remove(5);
-    MomentClosure closure = MomentClosure.of(faces, outward(5), SLACK);
-    assertFalse(closure.holds());
-    assertEquals(Optional.empty(), closure.enclosedVolume());
-    MomentClosure.PlaneGap gap = closure.gap().orElseThrow();
-    assertEquals(0, gap.vectorArea().minus(lid.vectorArea()).norm(), 1e-12);
-    assertEquals(0, gap.centre().minus(lid.reference()).norm(), 1e-12);
-    assertEquals(3.0, gap.volume(), 1e-12);
-  }
-
-  @Test
-  void twoMissingFacesAreOpenWithoutAPlaneGap() {
+  void twoMissingFacesFailTheConditions() {
     List<SurfaceMoments> faces = box(Vector3.ZERO, new Vector3(2, 3, 0.5));
     faces.remove(5);
     faces.remove(0);
     MomentClosure closure = MomentClosure.of(faces, outward(4), SLACK);
     assertFalse(closure.holds());
-    assertEquals(Optional.empty(), closure.gap());
   }
 
   @Test
@@ -87,30 +72,6 @@ class MomentClosureTest {
     List<SurfaceMoments> faces = box(Vector3.ZERO, new Vector3(1, 1, 1));
     MomentClosure closure = MomentClosure.of(faces, List.of(1, 1, -1, 1, 1, 1), SLACK);
     assertFalse(closure.holds());
-    assertEquals(Optional.of(false), MomentClosure.failsForEverySign(faces, SLACK));
-  }
-
-  @Test
-  void openBoxFailsForEverySignHoweverItsFacesAreTurned() {
-    List<SurfaceMoments> faces = box(Vector3.ZERO, new Vector3(1, 2, 3));
-    faces.remove(3);
-    for (int code = 0; code < 1 << faces.size(); code++) {
-      List<Integer> signs = new ArrayList<>();
-      for (int k = 0; k < faces.size(); k++) {
-        signs.add((code >> k & 1) == 0 ? 1 : -1);
-      }
-      assertFalse(MomentClosure.of(faces, signs, SLACK).holds(), "signs " + signs);
-    }
-    assertEquals(Optional.of(true), MomentClosure.failsForEverySign(faces, SLACK));
-  }
-
-  @Test
-  void signsOfMoreThanTwentyPatchesAreNotAllTried() {
-    List<SurfaceMoments> faces = new ArrayList<>();
-    for (int k = 0; k < 4; k++) {
-      faces.addAll(box(new Vector3(2 * k, 0, 0), new Vector3(1, 1, 1)));
-    }
-    assertEquals(Optional.empty(), MomentClosure.failsForEverySign(faces, SLACK));
   }
 
   /** The trap: six equal centred holes leave no trace in vector area and moments. */

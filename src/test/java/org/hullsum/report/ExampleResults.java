@@ -220,7 +220,7 @@ final class ExampleResults {
                 List.of(
                     new SurfaceResult.Gap(
                         List.of("wall", "lid"),
-                        Optional.of(3.5),
+                        3.5,
                         new Vector3(1, 2, 3),
                         0.75,
                         Optional.of(0.1))))),
