@@ -8,6 +8,7 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.OptionalDouble;
 import java.util.Set;
+import java.util.function.Supplier;
 import org.hullsum.closure.VolumeFacings;
 import org.hullsum.flux.InputSensitivity;
 import org.hullsum.model.Case;
@@ -46,13 +47,15 @@ final class CaseAudit {
   }
 
   CaseResult run() {
+    LineInspection lines = new LineInspection(audited);
+    Supplier<List<LineInspection.Seen>> seen = workers.begin(lines::look);
     List<PatchAudit> patches = integratePatches();
-    List<SurfaceAudit> surfaces = inspectSurfaces(patches);
+    List<SurfaceAudit> surfaces = inspectSurfaces(patches, seen.get());
     FacingAudit facings = new FacingAudit(patches, surfaces);
     List<SingularityAudit> onPatches = inspectPatches(patches);
     List<SingularityAudit> inVolumes = inspectVolumes(surfaces);
     List<InteriorAudit> interiors = integrateInteriors(surfaces, inVolumes);
-    List<List<PatchRate>> rates = rates(patches, onPatches);
+    List<List<PatchRate>> rates = rates(patches, onPatches, surfaces);
     BalanceSheet sheet = new BalanceSheet(audited, scales, rates, interiors);
     List<BalanceSheet.Drawn> drawn =
         Subjects.of(audited, surfaces, scales).stream().map(sheet::draw).toList();
@@ -86,11 +89,10 @@ final class CaseAudit {
     return workers.map("patches", patches.size(), i -> integration.integrate(patches.get(i)));
   }
 
-  private List<SurfaceAudit> inspectSurfaces(List<PatchAudit> patches) {
+  private List<SurfaceAudit> inspectSurfaces(
+      List<PatchAudit> patches, List<LineInspection.Seen> seen) {
     SurfaceInspection inspection = new SurfaceInspection(patches, inputs.values());
-    List<Volume> volumes = audited.volumes();
-    return inspection.judge(
-        workers.map("surfaces", volumes.size(), i -> inspection.sew(volumes.get(i))));
+    return inspection.judge(workers.map("surfaces", seen.size(), i -> inspection.sew(seen.get(i))));
   }
 
   private List<SingularityAudit> inspectPatches(List<PatchAudit> patches) {
@@ -133,12 +135,22 @@ final class CaseAudit {
         });
   }
 
-  private List<List<PatchRate>> rates(List<PatchAudit> patches, List<SingularityAudit> onPatches) {
+  private List<List<PatchRate>> rates(
+      List<PatchAudit> patches, List<SingularityAudit> onPatches, List<SurfaceAudit> surfaces) {
+    Map<String, Double> slackAreas = new LinkedHashMap<>();
+    for (SurfaceAudit surface : surfaces) {
+      for (int k = 0; k < surface.patches().size(); k++) {
+        double slackArea = surface.sewn().seams().slackArea(k);
+        slackAreas.merge(surface.patches().get(k).name(), slackArea, Math::max);
+      }
+    }
     List<List<PatchRate>> rates = new ArrayList<>();
     for (int i = 0; i < instants.size(); i++) {
       List<PatchRate> now = new ArrayList<>();
       for (int p = 0; p < patches.size(); p++) {
-        now.add(patches.get(p).rateAt(i, scales.rate(), onPatches.get(p).singular(scales)));
+        PatchAudit patch = patches.get(p);
+        Optional<String> bad = onPatches.get(p).singular(scales);
+        now.add(patch.rateAt(i, scales.rate(), bad, slackAreas.getOrDefault(patch.name(), 0.0)));
       }
       rates.add(now);
     }

@@ -36,6 +36,9 @@ record PatchAudit(
     Optional<String> degenerate,
     List<List<PatchFlux>> fluxes,
     List<List<Optional<Estimate>>> claims) {
+  /** How much denser than on average over the patch the flux is taken to be along its seams. */
+  private static final double SEAM_DENSITY = 10;
+
   PatchAudit {
     Objects.requireNonNull(patch, "patch");
     Objects.requireNonNull(surface, "surface");
@@ -66,8 +69,9 @@ record PatchAudit(
    * @param instant its index
    * @param scale from working units to the rate unit
    * @param bad why a flux that follows the normal can't be used
+   * @param slackArea what may be missing, or there twice, along its seams
    */
-  PatchRate rateAt(int instant, double scale, Optional<String> bad) {
+  PatchRate rateAt(int instant, double scale, Optional<String> bad, double slackArea) {
     List<Estimate> parts = new ArrayList<>();
     List<Estimate> following = new ArrayList<>();
     double magnitude = 0;
@@ -80,7 +84,10 @@ record PatchAudit(
       accurate &= flux.status() == Integral.Status.REACHED;
       unknown |= flux.basis() == FluxBasis.UNKNOWN;
       Optional<String> fault = turns ? bad.or(() -> degenerate) : Optional.empty();
-      Optional<Estimate> estimate = estimate(flux, turns ? scale * sign : scale);
+      Optional<Estimate> estimate =
+          turns
+              ? estimate(flux, scale * sign).map(e -> e.widened(slack(flux, scale, slackArea)))
+              : estimate(flux, scale);
       if (flux.basis() != FluxBasis.UNKNOWN && missing.isEmpty()) {
         missing = fault.or(() -> estimate.isEmpty() ? Optional.of(notFinite()) : Optional.empty());
       }
@@ -100,6 +107,12 @@ record PatchAudit(
         magnitude,
         accurate,
         missing);
+  }
+
+  /** What may flow through the slack of the seams. */
+  private double slack(PatchFlux flux, double scale, double slackArea) {
+    double area = geometry.map(PatchGeometry::area).orElse(0.0);
+    return area > 0 ? SEAM_DENSITY * Math.abs(scale) * flux.magnitude() / area * slackArea : 0;
   }
 
   private String notFinite() {

@@ -4,8 +4,6 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import java.util.stream.IntStream;
-import org.hullsum.closure.FacingFinder;
 import org.hullsum.closure.FoundFacing;
 import org.hullsum.closure.FoundFacing.Side;
 import org.hullsum.closure.MomentClosure;
@@ -17,15 +15,14 @@ import org.hullsum.closure.SurfaceMoments;
 import org.hullsum.closure.VolumeFacings;
 import org.hullsum.flux.PatchGeometry;
 import org.hullsum.model.Patch;
-import org.hullsum.model.Volume;
 import org.hullsum.numeric.Vector3;
 
 /**
  * Inspects the surfaces of volumes: which way their patches face, twice over, by lines and by
  * seams, and whether they close.
  *
- * <p>Each volume is first looked at by itself, with {@link #sew}; the seams of all of them together
- * then tell sides too, {@link #judge}.
+ * <p>Each volume is first sewn by itself, with {@link #sew}; the seams of all of them together then
+ * tell sides too, {@link #judge}.
  */
 final class SurfaceInspection {
   private final List<PatchAudit> all;
@@ -36,41 +33,23 @@ final class SurfaceInspection {
     this.parameters = parameters;
   }
 
-  SewnSurface sew(Volume volume) {
-    List<PatchAudit> surfaced = new ArrayList<>();
-    Optional<String> bare = Optional.empty();
-    boolean bounded = false;
-    for (PatchAudit audit : all) {
-      Patch patch = audit.patch();
-      if (patch.isBaffle() || !touches(patch, volume.name())) {
-        continue;
-      }
-      bounded = true;
-      if (audit.surface().isEmpty()) {
-        bare = bare.or(() -> Optional.of(patch.name()));
-      } else if (audit.hasArea()) {
-        surfaced.add(audit);
-      }
-    }
-    FacingFinder finder =
-        new FacingFinder(
-            surfaced.stream().map(p -> p.patch().surface().orElseThrow()).toList(), parameters);
-    VolumeFacings byLines = finder.find(IntStream.range(0, surfaced.size()).boxed().toList());
-    int[] signs = byLines.facings().stream().mapToInt(SurfaceInspection::sign).toArray();
+  SewnSurface sew(LineInspection.Seen seenFirst) {
+    LineInspection.Seen seen =
+        seenFirst.without(
+            all.stream().filter(p -> !p.hasArea()).map(PatchAudit::name).toList(), parameters);
+    List<String> names = seen.patches().stream().map(Patch::name).toList();
+    List<PatchAudit> surfaced = all.stream().filter(p -> names.contains(p.name())).toList();
+    int[] signs = seen.facings().facings().stream().mapToInt(SurfaceInspection::sign).toArray();
     Seams seams =
         new SeamFinder(surfaced.stream().map(p -> p.rims().orElseThrow()).toList()).find(signs);
     return new SewnSurface(
-        volume,
+        seen.volume(),
         surfaced,
-        bare,
-        bounded,
-        byLines,
-        finder.placed(seams),
-        ShellFinder.shells(surfaced.size(), seams, volumes(surfaced), finder::encloses));
-  }
-
-  private static boolean touches(Patch patch, String volume) {
-    return patch.leaves().equals(volume) || patch.enters().equals(volume);
+        seen.bare(),
+        seen.bounded(),
+        seen.facings(),
+        seen.finder().placed(seams),
+        ShellFinder.shells(surfaced.size(), seams, volumes(surfaced), seen.finder()::encloses));
   }
 
   /** Of the construction normal as found or leaned to; 0 where there is neither. */

@@ -6,7 +6,9 @@ import java.util.concurrent.ExecutionException;
 import java.util.concurrent.ExecutorService;
 import java.util.concurrent.Executors;
 import java.util.concurrent.Future;
+import java.util.concurrent.FutureTask;
 import java.util.function.IntFunction;
+import java.util.function.Supplier;
 import org.hullsum.problem.InternalFault;
 
 /**
@@ -58,6 +60,22 @@ final class Workers {
     } finally {
       pool.shutdownNow();
     }
+  }
+
+  /**
+   * Begins one piece of work beside what follows; on one thread it is done when it is asked for.
+   *
+   * @return gives the result, waiting for it where it is not there yet
+   */
+  <T> Supplier<T> begin(Supplier<T> piece) {
+    if (threads == 1) {
+      return piece;
+    }
+    FutureTask<T> task = new FutureTask<>(piece::get);
+    Thread thread = new Thread(task, "beside");
+    thread.setDaemon(true);
+    thread.start();
+    return () -> resultOf(task);
   }
 
   private static <T> T resultOf(Future<T> future) {

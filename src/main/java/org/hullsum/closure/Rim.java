@@ -221,6 +221,13 @@ public final class Rim {
     return piece(pieceAt(inside)).slope(inside);
   }
 
+  /** The parameter of the given point that is nearest to a place on the piece it lies in. */
+  double snapped(double s) {
+    double inside = reduced(s);
+    int k = pieceAt(inside);
+    return inside - at[k] < at[k + 1] - inside ? at[k] : at[k + 1];
+  }
+
   /** The parameter of the point of a piece that is nearest to a point, clipped to the piece. */
   double nearest(Vector3 p, int k) {
     double from = at[k];

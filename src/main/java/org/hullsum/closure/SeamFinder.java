@@ -126,7 +126,8 @@ public final class SeamFinder {
     }
     double slack = 0;
     for (double part : PROBES) {
-      for (RimTree.Hit hit : company(rim, stretch.rim(), stretch.at(part))) {
+      // Between the given points a rim is known less well than seams are asked to fit.
+      for (RimTree.Hit hit : company(rim, stretch.rim(), rim.snapped(stretch.at(part)))) {
         slack = Math.max(slack, hit.distance());
       }
     }

@@ -17,6 +17,15 @@ public record Seams(List<Seam> seams, List<Gap> gaps, double slack, double slack
     gaps = List.copyOf(gaps);
   }
 
+  /** The part of {@link #slackArea} that lies along the seams of one patch. */
+  public double slackArea(int patch) {
+    double sum = 0;
+    for (Seam seam : seams) {
+      sum += seam.patches().contains(patch) ? seam.slack() * seam.length() : 0;
+    }
+    return sum;
+  }
+
   /** Whether each stretch of every rim meets exactly one other. */
   public boolean close() {
     return gaps.isEmpty() && seams.stream().noneMatch(Seam::isCrowded);
