@@ -250,8 +250,8 @@ final class BalanceBuilder {
     if (interiorMissing.isPresent()) {
       return Conclusion.undecided(interiorMissing.get());
     }
-    if (integrated && subject.open().isPresent()) {
-      return Conclusion.undecided(subject.open().get());
+    if (integrated && subject.unproved().isPresent()) {
+      return Conclusion.undecided(subject.unproved().get());
     }
     if (budget.refusal().isPresent()) {
       return Conclusion.undecided(budget.refusal().get());

@@ -14,7 +14,7 @@ import org.hullsum.model.Tolerances;
  * @param members the volumes inside; the volume itself where it is one
  * @param check identity or conservation
  * @param tolerances stated, the absolute one in the rate unit
- * @param open why a volume of it is not closed, where that was proved
+ * @param unproved why a volume of it is not known to be closed
  * @param unbounded why there is nothing to balance
  */
 record BalanceSubject(
@@ -24,14 +24,14 @@ record BalanceSubject(
     Set<String> members,
     BalanceResult.Check check,
     Tolerances tolerances,
-    Optional<String> open,
+    Optional<String> unproved,
     Optional<String> unbounded) {
   BalanceSubject {
     Objects.requireNonNull(name, "name");
     Objects.requireNonNull(label, "label");
     Objects.requireNonNull(check, "check");
     Objects.requireNonNull(tolerances, "tolerances");
-    Objects.requireNonNull(open, "open");
+    Objects.requireNonNull(unproved, "unproved");
     Objects.requireNonNull(unbounded, "unbounded");
     members = Set.copyOf(members);
   }

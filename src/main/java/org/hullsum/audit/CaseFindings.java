@@ -1,14 +1,17 @@
 package org.hullsum.audit;
 
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.Comparator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.stream.Collectors;
+import org.hullsum.closure.FoundFacing.Side;
 import org.hullsum.closure.Gap;
 import org.hullsum.closure.Seam;
+import org.hullsum.closure.Shell;
 import org.hullsum.closure.VolumeFacings;
 import org.hullsum.flux.PatchFlux;
 import org.hullsum.model.Claim;
@@ -26,6 +29,9 @@ import org.hullsum.quadrature.Integral;
 final class CaseFindings {
   /** Gaps that one message tells; the others are in the surface's own list. */
   private static final int MOST_GAPS_TOLD = 3;
+
+  /** Distance and difference of rims that may belong together, relative to their length. */
+  private static final double ALIKE = 0.2;
 
   private final Scales scales;
   private final List<Finding> findings = new ArrayList<>();
@@ -166,6 +172,10 @@ final class CaseFindings {
           .filter(Seam::isCrowded)
           .forEach(seam -> addCrowded(surface, seam));
     }
+    surface.sewn().shells().stream()
+        .filter(shell -> !shell.consistent())
+        .forEach(shell -> addTwisted(surface, shell));
+    surface.offered().forEach(name -> addOffered(surface, name));
     if (!surface.gaps().isEmpty()) {
       addOpen(surface);
     } else if (surface.bare().isEmpty() && !surface.overlaps()) {
@@ -211,6 +221,42 @@ final class CaseFindings {
         Map.of("patches", names));
   }
 
+  private void addTwisted(SurfaceAudit surface, Shell shell) {
+    List<String> names = names(surface, shell.patches());
+    add(
+        FindingCode.ORIENTATION_CONFLICT,
+        "the patches "
+            + String.join(", ", names)
+            + " of `"
+            + surface.volume().name()
+            + "` can't be turned so that all agree along their seams: they form a one-sided surface",
+        surface.volume().name(),
+        surface.volume().place(),
+        Map.of("patches", names));
+  }
+
+  /** On an open surface no side is outward: what would make the normals agree is only offered. */
+  private void addOffered(SurfaceAudit surface, String name) {
+    boolean undetermined =
+        surface.facingOf(name).filter(f -> f.side() == Side.UNDETERMINED).isPresent();
+    PatchAudit patch =
+        surface.patches().stream().filter(p -> p.name().equals(name)).findFirst().orElseThrow();
+    if (undetermined) {
+      add(
+          Finding.of(
+                  FindingCode.ORIENTATION_REVERSED,
+                  "the surface of `"
+                      + surface.volume().name()
+                      + "` is open, so no side of it is outward; turning `"
+                      + name
+                      + "` would make its normals agree along the seams",
+                  name,
+                  Optional.of(patch.patch().facingPlace()),
+                  Map.of())
+              .weighing(Severity.WARNING));
+    }
+  }
+
   private static List<String> names(SurfaceAudit surface, List<Integer> patches) {
     return patches.stream().map(p -> surface.patches().get(p).name()).toList();
   }
@@ -235,10 +281,42 @@ final class CaseFindings {
         gaps.size() > MOST_GAPS_TOLD ? "; and " + (gaps.size() - MOST_GAPS_TOLD) + " more" : "";
     add(
         FindingCode.SURFACE_OPEN,
-        surface.openReason().orElseThrow() + ": " + told + more,
+        surface.openReason().orElseThrow() + ": " + told + more + nearest(surface),
         surface.volume().name(),
         surface.volume().place(),
         evidence);
+  }
+
+  /** The two rims that most nearly fit, where they are so alike that one may be misplaced. */
+  private String nearest(SurfaceAudit surface) {
+    List<Gap> gaps = surface.gaps();
+    String said = "";
+    double least = ALIKE;
+    for (int i = 0; i < gaps.size(); i++) {
+      for (int j = i + 1; j < gaps.size(); j++) {
+        Gap a = gaps.get(i);
+        Gap b = gaps.get(j);
+        double apart = a.centre().minus(b.centre()).norm();
+        double unlike =
+            (apart + Math.abs(a.length() - b.length())) / Math.min(a.length(), b.length());
+        if (unlike < least && Collections.disjoint(a.patches(), b.patches())) {
+          least = unlike;
+          said =
+              ". The rims of `"
+                  + String.join("`, `", names(surface, a.patches()))
+                  + "` and `"
+                  + String.join("`, `", names(surface, b.patches()))
+                  + "` are alike: "
+                  + Figures.text(scales.length() * a.length(), scales.lengthUnit())
+                  + " and "
+                  + Figures.text(scales.length() * b.length(), scales.lengthUnit())
+                  + " long, their centres "
+                  + Figures.text(scales.length() * apart, scales.lengthUnit())
+                  + " apart; should they meet?";
+        }
+      }
+    }
+    return said;
   }
 
   /** A gap's rim: on what, how long, where. */

@@ -160,9 +160,11 @@ final class FacingAudit {
             + (outside ? patch.patch().enters() : leaves)
             + "`, which the patch "
             + (outside ? "enters" : "leaves")
-            + (turns
-                ? "; its flux is counted with the wrong sign"
-                : "; its flux does not follow the normal, so no figure changes");
+            + (!turns
+                ? "; its flux does not follow the normal, so no figure changes"
+                : patch.passesNothing()
+                    ? "; nothing flows through it, so no figure changes"
+                    : "; its flux is counted with the wrong sign");
     Map<String, Object> evidence = new LinkedHashMap<>();
     evidence.put("declared", patch.patch().facing().text());
     evidence.put("found", FoundFacing.INWARD.word());

@@ -101,11 +101,11 @@ final class GapIntegration {
     }
   }
 
-  /** Empty where there is no gap with a whole rim, no field to pass it, or no finite figure. */
+  /** Empty where there is no hole with a whole rim, no field to pass it, or no finite figure. */
   Optional<GapAudit> integrate(SurfaceAudit audit, List<FieldUse.Carrier> carriers) {
     List<Gap> gaps = audit.gaps();
     boolean whole = gaps.stream().allMatch(g -> g.whole() && g.vectorArea().norm() > 0);
-    if (gaps.isEmpty() || !whole || carriers.isEmpty() || audit.signs().isEmpty()) {
+    if (gaps.isEmpty() || !whole || carriers.isEmpty() || audit.signs().isEmpty() || loose(audit)) {
       return Optional.empty();
     }
     List<BoundaryPatch> closed = new ArrayList<>(audit.boundary());
@@ -144,6 +144,17 @@ final class GapIntegration {
             .map(p -> audit.patches().get(p).name())
             .toList();
     return Optional.of(new GapAudit(gaps, between, through, outward, divergence));
+  }
+
+  /**
+   * Whether a patch on a rim hangs on no other: then the rims are not those of holes but of patches
+   * that should have met.
+   */
+  private static boolean loose(SurfaceAudit audit) {
+    return audit.gaps().stream()
+        .flatMap(g -> g.patches().stream())
+        .anyMatch(
+            p -> audit.sewn().seams().seams().stream().noneMatch(s -> s.patches().contains(p)));
   }
 
   private static StatedFlux stated(FieldUse.Carrier carrier, SurfaceAudit audit) {

@@ -63,6 +63,13 @@ record PatchAudit(
     return fluxes.get(0).stream().anyMatch(f -> f.basis().followsNormal());
   }
 
+  /** Whether what follows the normal is zero at every instant and everywhere. */
+  boolean passesNothing() {
+    return fluxes.stream()
+        .flatMap(List::stream)
+        .noneMatch(f -> f.basis().followsNormal() && f.magnitude() > 0);
+  }
+
   /**
    * The rate at an instant.
    *

@@ -37,7 +37,7 @@ final class Subjects {
               Set.of(volume.name()),
               identity ? Check.IDENTITY : Check.CONSERVATION,
               scaled(volume.tolerances(), scales),
-              surface.openReason(),
+              surface.unproved(),
               surface.bounded() ? Optional.empty() : surface.noRegion()));
     }
     for (Envelope envelope : audited.envelopes()) {
@@ -50,7 +50,7 @@ final class Subjects {
               Set.copyOf(envelope.volumes()),
               identities.containsAll(envelope.volumes()) ? Check.IDENTITY : Check.CONSERVATION,
               scaled(envelope.tolerances(), scales),
-              members.stream().flatMap(m -> m.openReason().stream()).findFirst(),
+              members.stream().flatMap(m -> m.unproved().stream()).findFirst(),
               members.stream().anyMatch(SurfaceAudit::bounded)
                   ? Optional.empty()
                   : members.get(0).noRegion()));

@@ -98,6 +98,12 @@ record SurfaceAudit(
                 : "` is open"));
   }
 
+  /** Why the surface is not known to be closed, where each of its patches has a surface. */
+  Optional<String> unproved() {
+    boolean told = bare().isPresent() || patches().isEmpty() || closed().orElse(false);
+    return told ? Optional.empty() : reason();
+  }
+
   /** Why no region is enclosed, so that no volume integral can be taken. */
   Optional<String> noRegion() {
     if (!bounded()) {

@@ -11,6 +11,9 @@ final class GapTracer {
   /** How near two ends must lie to be joined, in tolerances of the match. */
   private static final double JOINT = 40;
 
+  /** To what part of its length the place of a rim is known. */
+  private static final double NOISE = 1e-8;
+
   private final List<Rim> rims;
   private final int[] patchOf;
   private final int[] signs;
@@ -136,11 +139,20 @@ final class GapTracer {
     return new Gap(
         List.copyOf(patches),
         sums.length,
-        origin.plus(sums.centre.times(1 / sums.length)),
+        withoutNoise(origin.plus(sums.centre.times(1 / sums.length)), sums.length),
         sums.area.times(0.5),
         outline,
         whole,
         Gap.NONE);
+  }
+
+  /** Components that are zero as far as a rim is known are told as zero. */
+  private static Vector3 withoutNoise(Vector3 centre, double length) {
+    double noise = NOISE * length;
+    return new Vector3(
+        Math.abs(centre.x()) < noise ? 0 : centre.x(),
+        Math.abs(centre.y()) < noise ? 0 : centre.y(),
+        Math.abs(centre.z()) < noise ? 0 : centre.z());
   }
 
   /** Integrals along a rim, about its first point. */

@@ -156,6 +156,7 @@ final class CaseText {
 
   private String gap(SurfaceResult.Gap gap) {
     String unit = audited.lengthUnit();
+    String rateUnit = audited.balances().stream().findFirst().map(BalanceResult::unit).orElse("1");
     return "gap"
         + (gap.between().isEmpty() ? "" : " between " + String.join(" and ", gap.between()))
         + " of "
@@ -166,7 +167,7 @@ final class CaseText {
         + ", rim "
         + Figures.quoted(gap.length(), unit)
         + gap.fluxThrough()
-            .map(f -> ", outward flux through a plane over it " + Figures.quoted(f))
+            .map(f -> ", outward flux through a plane over it " + Figures.quoted(f, rateUnit))
             .orElse("");
   }
 

@@ -5,27 +5,41 @@ import java.util.stream.Collectors;
 import org.hullsum.audit.BalanceResult;
 import org.hullsum.audit.CaseResult;
 import org.hullsum.audit.Explanation;
+import org.hullsum.audit.Verdict;
 
 /** The ranking of explanations, with the number that would fit by chance before it. */
 final class ExplanationText {
+  /** Fewer hypotheses than this that fit by chance are not worth a line. */
+  private static final double NOTED = 0.01;
+
   private ExplanationText() {}
 
   static void write(PageBuilder page, CaseResult audited) {
     List<Explanation> explanations = audited.explanations();
+    boolean off = audited.balances().stream().anyMatch(b -> b.verdict() == Verdict.IMBALANCED);
     if (explanations.isEmpty()) {
+      if (off) {
+        page.blank().line("What would explain it: nothing that was tried");
+      }
       return;
     }
-    page.blank().line("What would explain it, the likeliest first");
+    boolean fits = explanations.stream().anyMatch(Explanation::fits);
+    page.blank()
+        .line(
+            fits
+                ? "What would explain it, the likeliest first"
+                : "What would explain it: nothing that was tried; the nearest first");
     audited
         .fitByChance()
+        .filter(n -> n >= NOTED)
         .ifPresent(
             n ->
                 page.paragraph(
                     2,
                     2,
-                    "By chance alone "
+                    "By chance alone about "
                         + Figures.significant(n, 2)
-                        + " of the hypotheses tried would fit."));
+                        + " hypotheses would be expected to fit."));
     for (int i = 0; i < explanations.size(); i++) {
       write(page, i + 1, explanations.get(i), audited);
     }

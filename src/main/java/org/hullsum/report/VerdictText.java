@@ -48,15 +48,15 @@ final class VerdictText {
     return balance.check() == Check.IDENTITY
         ? identity(balance.verdict())
             + " An identity check says nothing of whether the geometry or the field is the intended"
-            + " one, whether the surface is closed, or whether the quantity is conserved."
+            + " one, or whether the quantity is conserved."
         : conservation(balance);
   }
 
   private static String identity(Verdict verdict) {
     return switch (verdict) {
       case BALANCED ->
-          "the outward fluxes agree with the field's own divergence, so facings and integrals hold"
-              + " together.";
+          "the outward fluxes agree with the field's own divergence, so integrals and the facings"
+              + " of what is flowed through hold together.";
       case IMBALANCED ->
           "the outward fluxes contradict the field's own divergence: a facing is wrong, the field"
               + " jumps or is singular inside, or an integral went wrong.";
