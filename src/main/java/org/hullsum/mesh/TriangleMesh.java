@@ -1,0 +1,81 @@
+package org.hullsum.mesh;
+
+import java.util.Arrays;
+import java.util.List;
+import org.hullsum.numeric.Vector3;
+
+/**
+ * A triangle mesh with shared vertices. Immutable; made by {@link TriangleMeshBuilder}.
+ *
+ * <p>Vertices and triangles are numbered from 0. Each triangle's normal follows the right-hand rule
+ * along its corners 0, 1, 2. Every triangle belongs to one part, numbered in the order in which the
+ * file names them.
+ */
+public final class TriangleMesh {
+  private final double[] coordinates;
+  private final int[] corners;
+  private final int[] partStarts;
+  private final List<String> parts;
+
+  /**
+   * Takes over the arrays, which the caller must not touch again.
+   *
+   * @param coordinates x, y, z of each vertex in turn
+   * @param corners three vertices of each triangle in turn
+   * @param partStarts first triangle of each part, ascending, the first 0
+   * @param parts the names of the parts, some perhaps empty or alike
+   */
+  TriangleMesh(double[] coordinates, int[] corners, int[] partStarts, List<String> parts) {
+    this.coordinates = coordinates;
+    this.corners = corners;
+    this.partStarts = partStarts;
+    this.parts = List.copyOf(parts);
+  }
+
+  public int vertexCount() {
+    return coordinates.length / 3;
+  }
+
+  public int triangleCount() {
+    return corners.length / 3;
+  }
+
+  /** The vertex at corner 0, 1 or 2 of a triangle. */
+  public int corner(int triangle, int k) {
+    return corners[3 * triangle + k];
+  }
+
+  public double x(int vertex) {
+    return coordinates[3 * vertex];
+  }
+
+  public double y(int vertex) {
+    return coordinates[3 * vertex + 1];
+  }
+
+  public double z(int vertex) {
+    return coordinates[3 * vertex + 2];
+  }
+
+  public Vector3 vertex(int vertex) {
+    return new Vector3(x(vertex), y(vertex), z(vertex));
+  }
+
+  /** ½ (b − a) × (c − a): the normal times the area. */
+  public Vector3 areaVector(int triangle) {
+    Vector3 a = vertex(corner(triangle, 0));
+    Vector3 ab = vertex(corner(triangle, 1)).minus(a);
+    return ab.cross(vertex(corner(triangle, 2)).minus(a)).times(0.5);
+  }
+
+  /** The names of the parts, in the order of the file. */
+  public List<String> parts() {
+    return parts;
+  }
+
+  /** The part to which a triangle belongs, an index into {@link #parts}. */
+  public int part(int triangle) {
+    int found = Arrays.binarySearch(partStarts, triangle);
+    return found >= 0 ? found : -found - 2;
+  }
+}
