@@ -14,7 +14,7 @@ final class ByteCursor implements FaultPlace {
   static final int FILE_BUFFER = 1 << 21;
 
   /** For the arrays inside a file that is itself read through a large buffer. */
-  static final int ARRAY_BUFFER = 1 << 16;
+  static final int ARRAY_BUFFER = 1 << 14;
 
   static final int END = -1;
 
@@ -121,6 +121,8 @@ final class ByteCursor implements FaultPlace {
   private int read() throws IOException, MeshFault {
     try {
       return channel.read(view);
+    } catch (CarriedFault carried) {
+      throw carried.fault();
     } catch (PackedFault broken) {
       throw places.fault(base + limit, broken.getMessage());
     }
