@@ -9,12 +9,13 @@ import org.hullsum.numeric.Vector3;
  *
  * <p>Vertices and triangles are numbered from 0. Each triangle's normal follows the right-hand rule
  * along its corners 0, 1, 2. Every triangle belongs to one part, numbered in the order in which the
- * file names them.
+ * file first names them.
  */
 public final class TriangleMesh {
   private final double[] coordinates;
   private final int[] corners;
-  private final int[] partStarts;
+  private final int[] runStarts;
+  private final int[] runParts;
   private final List<String> parts;
 
   /**
@@ -22,13 +23,16 @@ public final class TriangleMesh {
    *
    * @param coordinates x, y, z of each vertex in turn
    * @param corners three vertices of each triangle in turn
-   * @param partStarts first triangle of each part, ascending, the first 0
-   * @param parts the names of the parts, some perhaps empty or alike
+   * @param runStarts first triangle of each run of triangles of one part, ascending, the first 0
+   * @param runParts the part of each run
+   * @param parts the names of the parts, each once
    */
-  TriangleMesh(double[] coordinates, int[] corners, int[] partStarts, List<String> parts) {
+  TriangleMesh(
+      double[] coordinates, int[] corners, int[] runStarts, int[] runParts, List<String> parts) {
     this.coordinates = coordinates;
     this.corners = corners;
-    this.partStarts = partStarts;
+    this.runStarts = runStarts;
+    this.runParts = runParts;
     this.parts = List.copyOf(parts);
   }
 
@@ -75,7 +79,24 @@ public final class TriangleMesh {
 
   /** The part to which a triangle belongs, an index into {@link #parts}. */
   public int part(int triangle) {
-    int found = Arrays.binarySearch(partStarts, triangle);
-    return found >= 0 ? found : -found - 2;
+    int found = Arrays.binarySearch(runStarts, triangle);
+    return runParts[found >= 0 ? found : -found - 2];
+  }
+
+  /** The triangles of one part as a mesh of its own, with the vertices that they use. */
+  public TriangleMesh only(int part) {
+    TriangleMeshBuilder builder = new TriangleMeshBuilder();
+    builder.part(parts.get(part));
+    for (int t = 0; t < triangleCount(); t++) {
+      if (part(t) == part) {
+        builder.triangle(copied(builder, t, 0), copied(builder, t, 1), copied(builder, t, 2));
+      }
+    }
+    return builder.build(1);
+  }
+
+  private int copied(TriangleMeshBuilder builder, int triangle, int k) {
+    int v = corner(triangle, k);
+    return builder.vertex(x(v), y(v), z(v));
   }
 }

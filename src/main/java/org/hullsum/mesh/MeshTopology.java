@@ -1,0 +1,188 @@
+package org.hullsum.mesh;
+
+import java.util.ArrayList;
+import java.util.BitSet;
+import java.util.HashSet;
+import java.util.List;
+import java.util.Set;
+
+/**
+ * How the triangles of a mesh hang together: shells, holes, and which triangles face against the
+ * others.
+ *
+ * <p>Two triangles hang together across an edge that no third shares. Degenerate triangles, of
+ * which two corners are one vertex, and repeated ones count for nothing. Cost: linear in the number
+ * of triangles.
+ */
+public final class MeshTopology {
+  private final TriangleMesh mesh;
+  private final EdgePairing pairing;
+  private final BitSet turned;
+  private final List<MeshShell> shells;
+  private final List<MeshLoop> loops;
+  private final int degenerate;
+  private final int duplicates;
+
+  private MeshTopology(TriangleMesh mesh) {
+    this.mesh = mesh;
+    BitSet leftOut = new BitSet();
+    for (int t = 0; t < mesh.triangleCount(); t++) {
+      if (isDegenerate(t)) {
+        leftOut.set(t);
+      }
+    }
+    this.degenerate = leftOut.cardinality();
+    EdgePairing first = EdgePairing.of(mesh, leftOut);
+    this.duplicates = leaveOutDuplicates(first, leftOut);
+    this.pairing = duplicates > 0 ? EdgePairing.of(mesh, leftOut) : first;
+    this.turned = new BitSet();
+    this.shells = findShells(leftOut);
+    this.loops = new MeshLoops(mesh, pairing).loops();
+  }
+
+  /** Looks at a mesh. */
+  public static MeshTopology of(TriangleMesh mesh) {
+    return new MeshTopology(mesh);
+  }
+
+  private boolean isDegenerate(int t) {
+    int a = mesh.corner(t, 0);
+    int b = mesh.corner(t, 1);
+    int c = mesh.corner(t, 2);
+    return a == b || b == c || c == a;
+  }
+
+  /**
+   * Triangles with the corners of an earlier one; only where edges are crowded can there be any.
+   */
+  private int leaveOutDuplicates(EdgePairing first, BitSet leftOut) {
+    Set<Corners> seen = new HashSet<>();
+    int count = 0;
+    for (int t = 0; t < mesh.triangleCount(); t++) {
+      boolean suspect =
+          isSuspect(first, 3 * t) && isSuspect(first, 3 * t + 1) && isSuspect(first, 3 * t + 2);
+      if (suspect && !leftOut.get(t) && !seen.add(Corners.of(mesh, t))) {
+        leftOut.set(t);
+        count++;
+      }
+    }
+    return count;
+  }
+
+  /** Whether another triangle may share the edge and the two others: two alone may be a pair. */
+  private boolean isSuspect(EdgePairing first, int half) {
+    int mate = first.mate(half);
+    return mate == EdgePairing.CROWDED || (mate >= 0 && opposite(mate) == opposite(half));
+  }
+
+  private int opposite(int half) {
+    return EdgePairing.to(mesh, EdgePairing.next(half));
+  }
+
+  /** The three vertices of a triangle in ascending order. */
+  private record Corners(int low, int middle, int high) {
+    static Corners of(TriangleMesh mesh, int t) {
+      int a = mesh.corner(t, 0);
+      int b = mesh.corner(t, 1);
+      int c = mesh.corner(t, 2);
+      int low = Math.min(a, Math.min(b, c));
+      int high = Math.max(a, Math.max(b, c));
+      return new Corners(low, a + b + c - low - high, high);
+    }
+  }
+
+  private List<MeshShell> findShells(BitSet leftOut) {
+    int count = mesh.triangleCount();
+    BitSet seen = (BitSet) leftOut.clone();
+    int[] queue = new int[Math.max(1, count)];
+    List<MeshShell> found = new ArrayList<>();
+    for (int seed = seen.nextClearBit(0); seed < count; seed = seen.nextClearBit(seed)) {
+      found.add(findShell(seed, seen, queue));
+    }
+    return found;
+  }
+
+  /**
+   * Spreads from a triangle over paired edges; then the smaller set, or the inward one, is turned.
+   */
+  private MeshShell findShell(int seed, BitSet seen, int[] queue) {
+    int size = 0;
+    int against = 0;
+    boolean orientable = true;
+    boolean closed = true;
+    queue[size++] = seed;
+    seen.set(seed);
+    ShellSums sums = new ShellSums(mesh, seed);
+    for (int i = 0; i < size; i++) {
+      int t = queue[i];
+      boolean flipped = turned.get(t);
+      against += flipped ? 1 : 0;
+      sums.add(t, flipped ? -1 : 1);
+      for (int h = 3 * t; h < 3 * t + 3; h++) {
+        int mate = pairing.mate(h);
+        closed &= mate >= 0;
+        if (mate >= 0) {
+          boolean agrees = EdgePairing.from(mesh, h) != EdgePairing.from(mesh, mate);
+          boolean wanted = agrees == flipped;
+          int other = mate / 3;
+          if (!seen.get(other)) {
+            seen.set(other);
+            turned.set(other, wanted);
+            queue[size++] = other;
+          } else {
+            orientable &= turned.get(other) == wanted;
+          }
+        }
+      }
+    }
+    boolean turnAll = closed && orientable ? sums.volume() < 0 : 2 * against > size;
+    for (int i = 0; i < size && turnAll; i++) {
+      turned.flip(queue[i]);
+    }
+    int toTurn = turnAll ? size - against : against;
+    return new MeshShell(
+        seed, size, closed, orientable, orientable ? toTurn : 0, Math.abs(sums.volume()));
+  }
+
+  public TriangleMesh mesh() {
+    return mesh;
+  }
+
+  /** The shells, in the order of their first triangles. */
+  public List<MeshShell> shells() {
+    return shells;
+  }
+
+  /** The boundary loops. */
+  public List<MeshLoop> loops() {
+    return loops;
+  }
+
+  /**
+   * Whether a triangle is to be turned: in a closed shell so that all face out of what the shell
+   * encloses, in an open one so that all agree, the fewer being turned.
+   */
+  public boolean isToTurn(int triangle) {
+    return turned.get(triangle);
+  }
+
+  /** Edges that more than two triangles share. */
+  public int crowdedEdgeCount() {
+    return pairing.crowdedEdges();
+  }
+
+  /** Triangles with two corners in one vertex. */
+  public int degenerateCount() {
+    return degenerate;
+  }
+
+  /** Triangles with the same corners as an earlier one. */
+  public int duplicateCount() {
+    return duplicates;
+  }
+
+  /** Whether every shell is closed, and nothing crowded. */
+  public boolean isClosed() {
+    return pairing.crowdedEdges() == 0 && shells.stream().allMatch(MeshShell::closed);
+  }
+}
