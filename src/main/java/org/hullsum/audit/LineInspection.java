@@ -7,9 +7,11 @@ import java.util.Objects;
 import java.util.Optional;
 import java.util.stream.IntStream;
 import org.hullsum.closure.FacingFinder;
+import org.hullsum.closure.PatchProbe;
 import org.hullsum.closure.VolumeFacings;
 import org.hullsum.model.Case;
 import org.hullsum.model.Patch;
+import org.hullsum.model.PatchSurface;
 import org.hullsum.model.Volume;
 
 /**
@@ -61,9 +63,10 @@ final class LineInspection {
         Optional<String> bare,
         boolean bounded,
         Map<String, Double> parameters) {
+      PatchSurface.Visitor<PatchProbe> prepared = new Probes(parameters);
       FacingFinder finder =
           new FacingFinder(
-              patches.stream().map(p -> p.surface().orElseThrow()).toList(), parameters);
+              patches.stream().map(p -> p.surface().orElseThrow().accept(prepared)).toList());
       VolumeFacings facings = finder.find(IntStream.range(0, patches.size()).boxed().toList());
       return new Seen(volume, patches, bare, bounded, finder, facings);
     }
@@ -92,5 +95,23 @@ final class LineInspection {
       }
     }
     return Seen.of(volume, surfaced, bare, bounded, audited.inputs().values());
+  }
+
+  private static final class Probes implements PatchSurface.Visitor<PatchProbe> {
+    private final Map<String, Double> parameters;
+
+    Probes(Map<String, Double> parameters) {
+      this.parameters = parameters;
+    }
+
+    @Override
+    public PatchProbe formulas(PatchSurface.Formulas surface) {
+      return PatchProbe.of(surface.surface(), parameters);
+    }
+
+    @Override
+    public PatchProbe triangles(PatchSurface.Triangles surface) {
+      return PatchProbe.of(surface.tree());
+    }
   }
 }

@@ -14,6 +14,7 @@ import org.hullsum.flux.PulledBackSurface;
 import org.hullsum.model.Claim;
 import org.hullsum.model.FluxStatement;
 import org.hullsum.model.Patch;
+import org.hullsum.model.PatchSurface;
 import org.hullsum.model.StatedFlux;
 
 /**
@@ -54,7 +55,7 @@ final class PatchIntegration {
         patch,
         surface,
         geometry,
-        patch.surface().map(boundary -> PatchRims.of(boundary, inputs.values())),
+        patch.surface().map(boundary -> boundary.accept(new Rims())),
         sign,
         degenerate,
         noArea.isPresent() ? withoutArea(patch) : fluxes(patch, surface),
@@ -123,5 +124,17 @@ final class PatchIntegration {
   private Estimate rate(Claim claim, OptionalDouble instant) {
     InputSensitivity.Evaluated rate = inputs.evaluate(claim.rate().orElseThrow(), instant);
     return new Estimate(rate.value(), 0, rate.sensitivities());
+  }
+
+  private final class Rims implements PatchSurface.Visitor<PatchRims> {
+    @Override
+    public PatchRims formulas(PatchSurface.Formulas surface) {
+      return PatchRims.of(surface.surface(), inputs.values());
+    }
+
+    @Override
+    public PatchRims triangles(PatchSurface.Triangles surface) {
+      return PatchRims.of(surface.topology());
+    }
   }
 }

@@ -104,7 +104,7 @@ final class PatchReader {
                 map.get("about").flatMap(v -> values.freeText(v, "`about`")),
                 s.leaves(),
                 s.enters(),
-                surface.flatMap(SurfaceEntry::surface),
+                surface.flatMap(SurfaceEntry::patchSurface),
                 facing.orElse(new Facing.AsDrawn()),
                 flux,
                 claims,

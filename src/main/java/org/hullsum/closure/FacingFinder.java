@@ -12,7 +12,6 @@ import org.hullsum.closure.FoundFacing.Side;
 import org.hullsum.closure.VolumeFacings.Overlap;
 import org.hullsum.geometry.Crossing;
 import org.hullsum.geometry.Crossings;
-import org.hullsum.geometry.Surface;
 import org.hullsum.numeric.Vector3;
 
 /**
@@ -54,21 +53,17 @@ public final class FacingFinder {
    */
   private static final List<Vector3> DIRECTIONS = directions();
 
-  private final List<Surface> surfaces;
-  private final Map<String, Double> parameters;
-  private final Map<Integer, PatchProbe> probes = new LinkedHashMap<>();
+  private final List<PatchProbe> probes;
 
   /**
-   * @param surfaces of all patches; a patch is an index into them
-   * @param parameters the value of every parameter in their formulas
+   * @param probes of all patches; a patch is an index into them
    */
-  public FacingFinder(List<Surface> surfaces, Map<String, Double> parameters) {
-    this.surfaces = List.copyOf(surfaces);
-    this.parameters = Map.copyOf(parameters);
+  public FacingFinder(List<PatchProbe> probes) {
+    this.probes = List.copyOf(probes);
   }
 
   private PatchProbe probe(int patch) {
-    return probes.computeIfAbsent(patch, k -> new PatchProbe(surfaces.get(k), parameters));
+    return probes.get(patch);
   }
 
   private static List<Vector3> directions() {
@@ -145,7 +140,7 @@ public final class FacingFinder {
 
   /** The patch that has every probed point of a rim on its inside. */
   private int carrier(Gap gap) {
-    for (int patch = 0; patch < surfaces.size(); patch++) {
+    for (int patch = 0; patch < probes.size(); patch++) {
       int tried = patch;
       boolean on =
           !gap.patches().contains(patch)

@@ -5,6 +5,8 @@ import java.util.Map;
 import org.hullsum.geometry.BoundaryCurves;
 import org.hullsum.geometry.Extent;
 import org.hullsum.geometry.Surface;
+import org.hullsum.mesh.MeshTopology;
+import org.hullsum.mesh.TriangleMesh;
 
 /**
  * The boundary of one patch.
@@ -38,5 +40,18 @@ public record PatchRims(double size, List<Rim> rims) {
             .map(curve -> new Rim(curve.points(), curve.closed(), true))
             .toList();
     return new PatchRims(size, rims);
+  }
+
+  /** Of a mesh. */
+  public static PatchRims of(MeshTopology topology) {
+    TriangleMesh mesh = topology.mesh();
+    List<Rim> rims =
+        topology.loops().stream()
+            .map(
+                loop ->
+                    new Rim(
+                        loop.vertices().stream().map(mesh::vertex).toList(), loop.closed(), false))
+            .toList();
+    return new PatchRims(2 * mesh.high().minus(mesh.low()).norm(), rims);
   }
 }

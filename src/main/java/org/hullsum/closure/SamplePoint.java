@@ -8,4 +8,4 @@ import org.hullsum.numeric.Vector3;
  * @param position r
  * @param normal the construction normal, of length one
  */
-record SamplePoint(Vector3 position, Vector3 normal) {}
+public record SamplePoint(Vector3 position, Vector3 normal) {}

@@ -4,9 +4,10 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
-import org.hullsum.geometry.Crossing;
 import org.hullsum.geometry.Crossings;
 import org.hullsum.geometry.LineCrossings;
+import org.hullsum.geometry.Surface;
+import org.hullsum.mesh.TriangleTree;
 import org.hullsum.numeric.Vector3;
 
 /**
@@ -22,8 +23,13 @@ final class BoundaryLines {
           new Vector3(0.1934, -0.5471, 0.8144),
           new Vector3(0.8827, 0.1153, -0.4556));
 
-  private final List<LineCrossings> surfaces = new ArrayList<>();
-  private final List<LineCrossings.Workspace> workspaces = new ArrayList<>();
+  private final List<Cut> surfaces = new ArrayList<>();
+
+  /** How one patch is cut by lines. */
+  private interface Cut {
+    /** Adds the hits; false where one is doubtful. */
+    boolean along(Vector3 origin, Vector3 direction, int patch, List<Hit> hits);
+  }
 
   /**
    * A line's crossing with the boundary.
@@ -36,22 +42,40 @@ final class BoundaryLines {
 
   BoundaryLines(List<BoundaryPatch> boundary, Map<String, Double> values) {
     for (BoundaryPatch patch : boundary) {
-      LineCrossings crossings = LineCrossings.of(patch.surface().surface(), values);
-      surfaces.add(crossings);
-      workspaces.add(crossings.workspace());
+      surfaces.add(
+          patch
+              .surface()
+              .surface()
+              .map(formulas -> cut(formulas, values))
+              .orElseGet(() -> cut(patch.surface().tree().orElseThrow())));
     }
+  }
+
+  private static Cut cut(Surface surface, Map<String, Double> values) {
+    LineCrossings crossings = LineCrossings.of(surface, values);
+    LineCrossings.Workspace workspace = crossings.workspace();
+    return (origin, direction, patch, hits) -> {
+      Crossings found = crossings.along(origin, direction, workspace);
+      found.crossings().forEach(c -> hits.add(new Hit(c.t(), patch, c.chart())));
+      return found.reliable();
+    };
+  }
+
+  private static Cut cut(TriangleTree tree) {
+    double reach = LineCrossings.REACH * tree.extent();
+    return (origin, direction, patch, hits) -> {
+      TriangleTree.LineHits found = tree.along(origin, direction.unit(), reach);
+      found.places().forEach(t -> hits.add(new Hit(t / direction.norm(), patch, 0)));
+      return !found.doubtful();
+    };
   }
 
   /** All crossings in the order of the line; empty where a surface gives a doubt. */
   Optional<List<Hit>> along(Vector3 origin, Vector3 direction) {
     List<Hit> hits = new ArrayList<>();
     for (int k = 0; k < surfaces.size(); k++) {
-      Crossings found = surfaces.get(k).along(origin, direction, workspaces.get(k));
-      if (!found.reliable()) {
+      if (!surfaces.get(k).along(origin, direction, k, hits)) {
         return Optional.empty();
-      }
-      for (Crossing crossing : found.crossings()) {
-        hits.add(new Hit(crossing.t(), k, crossing.chart()));
       }
     }
     hits.sort(java.util.Comparator.comparingDouble(Hit::t));

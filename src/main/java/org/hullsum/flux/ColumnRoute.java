@@ -87,6 +87,9 @@ final class ColumnRoute {
    * @param limit largest number of points of each chart: each costs a line through the boundary
    */
   Optional<DensityOutcome> integrate(double relative, double enough, long limit) {
+    if (boundary.stream().anyMatch(patch -> patch.surface().mesh().isPresent())) {
+      return Optional.empty();
+    }
     Optional<Look> best = Optional.empty();
     for (Vector3 up : DIRECTIONS) {
       Optional<Look> look = look(up);

@@ -23,7 +23,7 @@ import org.hullsum.quadrature.SwitchFunctions;
  * <p>Components: one per density, then the same with |g| of the first density, then a bound on what
  * the inner integral of the first density may err by. Not thread-safe.
  */
-final class ConeIntegrand implements SquareIntegrand {
+final class ConeIntegrand implements SquareIntegrand, Cone {
   private static final int NORMAL = 3;
 
   private final PulledBackChart chart;
@@ -62,8 +62,8 @@ final class ConeIntegrand implements SquareIntegrand {
             : Optional.of(new FormulaIntegrand(functions, constants).at(instant));
   }
 
-  /** From now on integrates cones to that apex. */
-  void aim(Vector3 newApex, RayIntegrals newRays, int densities) {
+  @Override
+  public void aim(Vector3 newApex, RayIntegrals newRays, int densities) {
     apex = newApex;
     for (int axis = 0; axis < 3; axis++) {
       Arrays.fill(apexes[axis], apex.component(axis));
@@ -101,8 +101,8 @@ final class ConeIntegrand implements SquareIntegrand {
     }
   }
 
-  /** End points and signed heights on a lattice: rows x, y, z, height. */
-  double[][] lattice(Vector3 from, int n) {
+  @Override
+  public double[][] lattice(Vector3 from, int n) {
     apex = from;
     double[][] rows = new double[4][n * n];
     double[][] at = ChartIntegral.lattice(n);
@@ -116,20 +116,20 @@ final class ConeIntegrand implements SquareIntegrand {
     return rows;
   }
 
-  /** The point of space at a point of the square. */
-  Vector3 position(ParameterPoint point) {
+  @Override
+  public Vector3 position(ParameterPoint point) {
     double[][] row = new double[6][1];
     surface.evaluate(1, new double[] {point.u()}, new double[] {point.v()}, row);
     return new Vector3(row[0][0], row[1][0], row[2][0]);
   }
 
-  /** Integrates all components; the accuracy is that of the first density. */
-  Integral[] integrate(Accuracy accuracy) {
+  @Override
+  public Integral[] integrate(Accuracy accuracy) {
     return integrate(this, accuracy);
   }
 
-  /** Integrates |g| of the first density alone. */
-  Integral integrateMagnitude(Accuracy accuracy) {
+  @Override
+  public Integral integrateMagnitude(Accuracy accuracy) {
     int row = components - 2;
     double[][] all = new double[components][BLOCK];
     SquareIntegrand magnitude =

@@ -38,7 +38,7 @@ final class ConeRoute {
   /** Part of the allowed error that the inner integrals may take. */
   private static final double INNER_SHARE = 0.1;
 
-  private final List<ConeIntegrand> cones = new ArrayList<>();
+  private final List<Cone> cones = new ArrayList<>();
   private final List<Expression> densities;
   private final Map<String, Double> constants;
   private final OptionalDouble instant;
@@ -62,6 +62,10 @@ final class ConeRoute {
       for (PulledBackChart chart : patch.surface().charts()) {
         cones.add(new ConeIntegrand(chart, patch.outward(), densities, constants, instant));
       }
+      patch
+          .surface()
+          .mesh()
+          .ifPresent(mesh -> cones.add(new MeshCone(mesh, patch.outward(), densities.size())));
     }
   }
 
@@ -105,7 +109,7 @@ final class ConeRoute {
     Accuracy accuracy =
         new Accuracy(0, error / (2 * cones.size()), ChartIntegral.ANY_MAGNITUDE, limit);
     DensityTotals totals = new DensityTotals(densities.size());
-    for (ConeIntegrand cone : cones) {
+    for (Cone cone : cones) {
       cone.aim(apex, rays, densities.size());
       Integral[] parts = cone.integrate(accuracy);
       totals.add(parts);
@@ -120,7 +124,7 @@ final class ConeRoute {
     double error = MAGNITUDE_ACCURACY * Math.max(totals.magnitude(), Double.MIN_NORMAL);
     Accuracy accuracy = new Accuracy(0, error / cones.size(), ChartIntegral.ANY_MAGNITUDE, limit);
     Sum magnitude = Sum.create();
-    for (ConeIntegrand cone : cones) {
+    for (Cone cone : cones) {
       Integral part = cone.integrateMagnitude(accuracy);
       magnitude.add(part.value());
       totals.spent(part.evaluations());
@@ -147,7 +151,7 @@ final class ConeRoute {
     Arrays.fill(all, true);
     double[][] starts = repeated(apex, each);
     int first = 0;
-    for (ConeIntegrand cone : cones) {
+    for (Cone cone : cones) {
       double[][] rows = cone.lattice(apex, LOOKS);
       rays.integrate(each, starts, rows, all, results);
       double[] absolute = results[densities.size()];

@@ -116,6 +116,9 @@ public final class FluxIntegrator {
     @Override
     public PreparedFlux field(FluxStatement.Field statement) {
       VectorExpression field = statement.field().cartesian();
+      if (surface().mesh().isPresent()) {
+        return MeshFlux.of(surface().mesh().get(), field, inputs, relative);
+      }
       SurfaceFlux flux =
           new SurfaceFlux(
               surface().charts(),
@@ -137,6 +140,9 @@ public final class FluxIntegrator {
     }
 
     private PreparedFlux along(Expression density, FluxBasis basis) {
+      if (surface().mesh().isPresent()) {
+        return MeshFlux.along(surface().mesh().get(), density, basis, inputs, relative);
+      }
       SurfaceFlux flux =
           new SurfaceFlux(
               surface().charts(),

@@ -70,7 +70,10 @@ public record PatchGeometry(
    */
   public static PatchGeometry of(
       PulledBackSurface surface, Map<String, Double> values, int digits) {
-    Box3 box = Bounds.of(surface.surface(), values);
+    if (surface.surface().isEmpty()) {
+      return MeshSums.of(surface.mesh().orElseThrow());
+    }
+    Box3 box = Bounds.of(surface.surface().get(), values);
     Vector3 reference = box.centre();
     double size = box.diagonal() > 0 ? box.diagonal() : 1;
     List<ChartIntegral> charts = new ArrayList<>();

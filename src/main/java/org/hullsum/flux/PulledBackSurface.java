@@ -1,32 +1,69 @@
 package org.hullsum.flux;
 
 import java.util.List;
+import java.util.Optional;
 import org.hullsum.geometry.Surface;
+import org.hullsum.mesh.TriangleMesh;
+import org.hullsum.mesh.TriangleTree;
+import org.hullsum.model.PatchSurface;
 
 /**
- * A surface made ready for integration: tangents derived, the trim expressed in u and v.
+ * A surface made ready for integration: of formulas, with tangents derived and the trim expressed
+ * in u and v; or of triangles.
  *
  * <p>Made once for a patch and shared by all its integrals. Immutable and thread-safe.
  */
 public final class PulledBackSurface {
-  private final Surface surface;
+  private final Optional<Surface> surface;
   private final List<PulledBackChart> charts;
+  private final Optional<TriangleTree> tree;
 
-  private PulledBackSurface(Surface surface) {
+  private PulledBackSurface(
+      Optional<Surface> surface, List<PulledBackChart> charts, Optional<TriangleTree> tree) {
     this.surface = surface;
-    this.charts =
-        surface.charts().stream().map(c -> PulledBackChart.of(c, surface.trim())).toList();
+    this.charts = List.copyOf(charts);
+    this.tree = tree;
   }
 
   public static PulledBackSurface of(Surface surface) {
-    return new PulledBackSurface(surface);
+    return new PulledBackSurface(
+        Optional.of(surface),
+        surface.charts().stream().map(c -> PulledBackChart.of(c, surface.trim())).toList(),
+        Optional.empty());
   }
 
-  public Surface surface() {
+  public static PulledBackSurface of(PatchSurface surface) {
+    return surface.accept(
+        new PatchSurface.Visitor<>() {
+          @Override
+          public PulledBackSurface formulas(PatchSurface.Formulas formulas) {
+            return of(formulas.surface());
+          }
+
+          @Override
+          public PulledBackSurface triangles(PatchSurface.Triangles triangles) {
+            return new PulledBackSurface(
+                Optional.empty(), List.of(), Optional.of(triangles.tree()));
+          }
+        });
+  }
+
+  /** The formulas; empty where it is of triangles. */
+  Optional<Surface> surface() {
     return surface;
   }
 
+  /** The charts; none where it is of triangles. */
   List<PulledBackChart> charts() {
     return charts;
+  }
+
+  /** The triangles, for lines through them; empty where it is of formulas. */
+  Optional<TriangleTree> tree() {
+    return tree;
+  }
+
+  Optional<TriangleMesh> mesh() {
+    return tree.map(TriangleTree::mesh);
   }
 }

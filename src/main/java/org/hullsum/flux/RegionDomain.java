@@ -5,7 +5,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import org.hullsum.geometry.Bounds;
-import org.hullsum.geometry.Chart;
 import org.hullsum.numeric.Box3;
 import org.hullsum.numeric.Interval;
 import org.hullsum.numeric.Vector3;
@@ -48,9 +47,10 @@ final class RegionDomain implements HazardDomain {
   private List<Bounds> charts() {
     if (charts.isEmpty()) {
       for (BoundaryPatch patch : boundary) {
-        for (Chart chart : patch.surface().surface().charts()) {
-          charts.add(Bounds.of(chart, values));
-        }
+        patch
+            .surface()
+            .surface()
+            .ifPresent(s -> s.charts().forEach(chart -> charts.add(Bounds.of(chart, values))));
       }
     }
     return charts;
@@ -69,6 +69,11 @@ final class RegionDomain implements HazardDomain {
   @Override
   public Standing standing(Interval[] part) {
     Box3 here = new Box3(part[0], part[1], part[2]);
+    for (BoundaryPatch patch : boundary) {
+      if (patch.surface().tree().filter(tree -> tree.touches(here)).isPresent()) {
+        return Standing.PARTLY;
+      }
+    }
     for (Bounds chart : charts()) {
       if (mayTouch(chart, here)) {
         return Standing.PARTLY;

@@ -6,6 +6,7 @@ import java.util.Objects;
 import java.util.OptionalDouble;
 import org.hullsum.expression.Expression;
 import org.hullsum.field.VectorField;
+import org.hullsum.numeric.Box3;
 
 /**
  * Looks for places on patches and in regions at which a field or a density is undefined or grows
@@ -63,6 +64,12 @@ public final class SingularitySearch {
     SingularityOutcome result = new SingularityOutcome.ProvedAbsent();
     if (check.none()) {
       return result;
+    }
+    if (surface.mesh().isPresent()) {
+      // The box around the triangles holds more than them, so only absence can be shown.
+      Box3 box = MeshSums.box(surface.mesh().get());
+      SingularityOutcome around = new HazardSearch(new BoxDomain(box), check).run();
+      return around.isProvedAbsent() ? around : new SingularityOutcome.NotExcluded(box.centre(), "a part of it is zero");
     }
     for (PulledBackChart chart : surface.charts()) {
       SingularityOutcome outcome = new HazardSearch(new ChartDomain(chart, values), check).run();

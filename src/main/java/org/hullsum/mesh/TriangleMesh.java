@@ -65,6 +65,26 @@ public final class TriangleMesh {
     return new Vector3(x(vertex), y(vertex), z(vertex));
   }
 
+  /** The smallest x, y and z of any vertex. */
+  public Vector3 low() {
+    return extreme(1);
+  }
+
+  /** The largest. */
+  public Vector3 high() {
+    return extreme(-1);
+  }
+
+  private Vector3 extreme(int sign) {
+    double[] least = {
+      Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY
+    };
+    for (int k = 0; k < coordinates.length; k++) {
+      least[k % 3] = Math.min(least[k % 3], sign * coordinates[k]);
+    }
+    return new Vector3(sign * least[0], sign * least[1], sign * least[2]);
+  }
+
   /** ½ (b − a) × (c − a): the normal times the area. */
   public Vector3 areaVector(int triangle) {
     Vector3 a = vertex(corner(triangle, 0));

@@ -2,6 +2,8 @@ package org.hullsum.mesh;
 
 import java.util.ArrayList;
 import java.util.List;
+import org.hullsum.numeric.Box3;
+import org.hullsum.numeric.Interval;
 import org.hullsum.numeric.Vector3;
 
 /**
@@ -132,6 +134,24 @@ public final class TriangleTree {
       sum += side * side;
     }
     return Math.sqrt(sum);
+  }
+
+  /** Whether a triangle may have a point in a box: whether the box around a few of them has. */
+  public boolean touches(Box3 box) {
+    return touches(1, 0, box);
+  }
+
+  private boolean touches(int node, int level, Box3 box) {
+    int at = 6 * node;
+    Interval[] sides = {box.x(), box.y(), box.z()};
+    for (int k = 0; k < 3; k++) {
+      if (boxes[at + k] > sides[k].high() || boxes[at + 3 + k] < sides[k].low()) {
+        return false;
+      }
+    }
+    return level == depth
+        || touches(2 * node, level + 1, box)
+        || touches(2 * node + 1, level + 1, box);
   }
 
   /**

@@ -3,7 +3,6 @@ package org.hullsum.model;
 import java.util.List;
 import java.util.Objects;
 import java.util.Optional;
-import org.hullsum.geometry.Surface;
 import org.hullsum.problem.Place;
 
 /**
@@ -27,7 +26,7 @@ public record Patch(
     Optional<String> about,
     String leaves,
     String enters,
-    Optional<Surface> surface,
+    Optional<PatchSurface> surface,
     Facing facing,
     List<StatedFlux> fluxes,
     List<Claim> claims,

@@ -1,0 +1,57 @@
+package org.hullsum.model;
+
+import java.util.Objects;
+import org.hullsum.geometry.Surface;
+import org.hullsum.mesh.MeshTopology;
+import org.hullsum.mesh.TriangleMesh;
+import org.hullsum.mesh.TriangleTree;
+
+/** What a patch is made of. */
+public sealed interface PatchSurface {
+  /** The alternatives, one method each. */
+  interface Visitor<T> {
+    T formulas(Formulas surface);
+
+    T triangles(Triangles surface);
+  }
+
+  <T> T accept(Visitor<T> visitor);
+
+  /**
+   * A surface given by formulas.
+   *
+   * @param surface with its construction normal
+   */
+  record Formulas(Surface surface) implements PatchSurface {
+    public Formulas {
+      Objects.requireNonNull(surface, "surface");
+    }
+
+    @Override
+    public <T> T accept(Visitor<T> visitor) {
+      return visitor.formulas(this);
+    }
+  }
+
+  /**
+   * A triangle mesh; its construction normal is each triangle's right-hand rule.
+   *
+   * @param topology of the mesh, in working units of length
+   * @param tree for lines through it
+   */
+  record Triangles(MeshTopology topology, TriangleTree tree) implements PatchSurface {
+    public Triangles {
+      Objects.requireNonNull(topology, "topology");
+      Objects.requireNonNull(tree, "tree");
+    }
+
+    public TriangleMesh mesh() {
+      return topology.mesh();
+    }
+
+    @Override
+    public <T> T accept(Visitor<T> visitor) {
+      return visitor.triangles(this);
+    }
+  }
+}
