@@ -1,7 +1,11 @@
 package org.hullsum.mesh;
 
 import java.io.IOException;
+import java.io.InputStream;
+import java.io.InputStreamReader;
+import java.io.Reader;
 import java.nio.channels.ReadableByteChannel;
+import java.nio.charset.StandardCharsets;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
@@ -36,10 +40,11 @@ final class VtkXmlReader {
   /** Reads a file, as {@link MeshReader} says. */
   static void read(ReadableByteChannel channel, TriangleSink sink) throws IOException, MeshFault {
     ByteCursor bytes = new ByteCursor(channel);
+    skipMark(bytes);
     XmlHeadStream head = new XmlHeadStream(bytes);
     VtkXmlReader reader;
     try {
-      XMLStreamReader xml = parser().createXMLStreamReader(head);
+      XMLStreamReader xml = parser().createXMLStreamReader(letters(head));
       reader = new VtkXmlReader(xml, readRoot(xml));
       reader.readHead();
     } catch (XMLStreamException broken) {
@@ -54,6 +59,21 @@ final class VtkXmlReader {
       reader.readAppended(bytes);
     }
     reader.tell(sink, bytes);
+  }
+
+  /** Passes the mark of UTF-8 that some programs write first. */
+  private static void skipMark(ByteCursor bytes) throws IOException, MeshFault {
+    if (bytes.available(3) == 3 && bytes.peek() == 0xef && bytes.peekSecond() == 0xbb) {
+      bytes.advance(3);
+    }
+  }
+
+  /**
+   * Each byte as a letter: what is read of a file is ASCII, and the platform's parser reports bytes
+   * that it cannot decode on the standard error stream.
+   */
+  private static Reader letters(InputStream head) {
+    return new InputStreamReader(head, StandardCharsets.ISO_8859_1);
   }
 
   /** The platform's parser, which must follow nothing that leads out of the file. */

@@ -1,0 +1,84 @@
+package org.hullsum.mesh;
+
+import java.io.IOException;
+import java.nio.channels.ReadableByteChannel;
+import java.nio.channels.SeekableByteChannel;
+import java.nio.file.Files;
+import java.nio.file.Path;
+
+/**
+ * Reads a file of any format that is known, packed with gzip or not: by what it begins with, and
+ * only where that does not say by the ending of its name. Offsets in faults of a packed file count
+ * the bytes as unpacked.
+ */
+final class MeshFile {
+  private static final int GZIP_MAGIC_1 = 0x1f;
+  private static final int GZIP_MAGIC_2 = 0x8b;
+
+  private MeshFile() {}
+
+  /**
+   * Reads a file.
+   *
+   * @param stl reads what turns out to be STL
+   * @return the format that the file turned out to have
+   */
+  static MeshFormat read(Path path, MeshReader stl, TriangleSink sink)
+      throws IOException, MeshFault {
+    try (SeekableByteChannel file = Files.newByteChannel(path)) {
+      return read(file, file.size(), String.valueOf(path.getFileName()), stl, sink);
+    }
+  }
+
+  /**
+   * Reads what a channel gives.
+   *
+   * @param size bytes that the channel has, negative where it is not known
+   * @param name the name of the file, for its ending
+   */
+  static MeshFormat read(
+      ReadableByteChannel channel, long size, String name, MeshReader stl, TriangleSink sink)
+      throws IOException, MeshFault {
+    try {
+      PeekedChannel file = new PeekedChannel(channel, MeshFormat.HEAD);
+      byte[] head = file.head();
+      boolean packed =
+          head.length >= 2 && (head[0] & 0xff) == GZIP_MAGIC_1 && (head[1] & 0xff) == GZIP_MAGIC_2;
+      if (!packed) {
+        return readPlain(file, size, name, stl, sink);
+      }
+      try (PeekedChannel plain = new PeekedChannel(new GunzipChannel(file), MeshFormat.HEAD)) {
+        return readPlain(plain, -1, name, stl, sink);
+      }
+    } catch (PackedFault broken) {
+      throw MeshFault.atByte(0, broken.getMessage());
+    }
+  }
+
+  private static MeshFormat readPlain(
+      PeekedChannel file, long size, String name, MeshReader stl, TriangleSink sink)
+      throws IOException, MeshFault {
+    byte[] head = file.head();
+    if (head.length == 0) {
+      throw MeshFault.atByte(0, "the file is empty");
+    }
+    MeshFormat format =
+        MeshFormat.of(head, size, name)
+            .orElseThrow(
+                () ->
+                    MeshFault.atByte(
+                        0,
+                        "neither the content nor the ending of the file's name says that it is STL,"
+                            + " PLY, OBJ or VTK"));
+    MeshReader reader =
+        switch (format) {
+          case STL -> stl;
+          case PLY -> PlyReader::read;
+          case OBJ -> ObjReader::read;
+          case VTK_LEGACY -> VtkLegacyReader::read;
+          case VTK_XML -> VtkXmlReader::read;
+        };
+    reader.read(file, sink);
+    return format;
+  }
+}
