@@ -1,14 +1,16 @@
 package org.hullsum.mesh;
 
+import java.util.Arrays;
+
 /**
  * Divides a polygon in space into triangles between its corners, turning the same way around.
  *
- * <p>The polygon is looked at along the axis nearest to its normal (M. E. Newell's, in I. E.
- * Sutherland, R. F. Sproull, R. A. Schumacker, A characterization of ten hidden-surface algorithms,
- * 1974). Where it is strictly convex there, a fan from its first corner divides it; else ears are
- * cut off (G. H. Meisters, Polygons have ears, American Mathematical Monthly 82, 1975), which takes
- * O(n²) time where ears are plenty. A polygon that crosses itself is refused. Every edge of the
- * polygon is an edge of exactly one triangle, so what fitted to its neighbours still does.
+ * <p>The polygon is looked at along its normal (M. E. Newell's, in I. E. Sutherland, R. F. Sproull,
+ * R. A. Schumacker, A characterization of ten hidden-surface algorithms, 1974). Where it is
+ * strictly convex so, a fan from its first corner divides it; else ears are cut off (G. H.
+ * Meisters, Polygons have ears, American Mathematical Monthly 82, 1975), which takes O(n²) time
+ * where ears are plenty. A polygon that crosses itself is refused. Every edge of the polygon is an
+ * edge of exactly one triangle, so what fitted to its neighbours still does.
  */
 final class PolygonDivider {
   /** Tells the triangles, by the numbers that the caller gave the corners. */
@@ -30,7 +32,9 @@ final class PolygonDivider {
   private int[] corners = new int[0];
   private int count;
 
-  /** Twice the area of the polygon laid into the plane. */
+  private final double[] normal = new double[3];
+
+  /** Twice the area of the polygon laid into the plane: the length of the normal. */
   private double area;
 
   /** The largest part of any corner's area as seen from the first; 0 where all are on one line. */
@@ -84,9 +88,7 @@ final class PolygonDivider {
     }
   }
 
-  /**
-   * Lays the polygon into the plane of two axes, scaled to size 1, so that it turns to the left.
-   */
+  /** Lays the polygon into the plane across its normal, scaled to size 1, turning to the left. */
   private void project(double[] xyz) {
     if (u.length < count) {
       int room = count + (count >> 1);
@@ -96,8 +98,25 @@ final class PolygonDivider {
       previous = new int[room];
     }
     double scale = scale(xyz);
-    double[] normal = new double[3];
-    double largestCross = 0;
+    setNormal(xyz, scale);
+    double[] across = crossed(axis(shortest()), normal);
+    double length = length(across);
+    double[] up = crossed(normal, across);
+    int first = 3 * corners[0];
+    for (int k = 0; k < count; k++) {
+      int a = 3 * corners[k];
+      double x = (xyz[a] - xyz[first]) * scale;
+      double y = (xyz[a + 1] - xyz[first + 1]) * scale;
+      double z = (xyz[a + 2] - xyz[first + 2]) * scale;
+      u[k] = (x * across[0] + y * across[1] + z * across[2]) / length;
+      v[k] = (x * up[0] + y * up[1] + z * up[2]) / (length * area);
+    }
+  }
+
+  /** Sets the normal, whose length is twice the area, and how far the corners are off one line. */
+  private void setNormal(double[] xyz, double scale) {
+    Arrays.fill(normal, 0);
+    widest = 0;
     int first = 3 * corners[0];
     for (int k = 0; k < count; k++) {
       int a = 3 * corners[k];
@@ -109,20 +128,10 @@ final class PolygonDivider {
             ((xyz[a + p] - xyz[first + p]) * scale) * ((xyz[b + q] - xyz[first + q]) * scale)
                 - ((xyz[a + q] - xyz[first + q]) * scale) * ((xyz[b + p] - xyz[first + p]) * scale);
         normal[axis] += cross;
-        largestCross = Math.max(largestCross, Math.abs(cross));
+        widest = Math.max(widest, Math.abs(cross));
       }
     }
-    int axis = longest(normal);
-    boolean turned = normal[axis] < 0;
-    int across = (axis + (turned ? 2 : 1)) % 3;
-    int up = (axis + (turned ? 1 : 2)) % 3;
-    for (int k = 0; k < count; k++) {
-      int a = 3 * corners[k];
-      u[k] = (xyz[a + across] - xyz[first + across]) * scale;
-      v[k] = (xyz[a + up] - xyz[first + up]) * scale;
-    }
-    area = Math.abs(normal[axis]);
-    widest = largestCross;
+    area = length(normal);
   }
 
   /** One over the largest distance along an axis from the first corner. */
@@ -137,9 +146,26 @@ final class PolygonDivider {
     return 1 / size;
   }
 
-  private static int longest(double[] normal) {
-    int axis = Math.abs(normal[1]) > Math.abs(normal[0]) ? 1 : 0;
-    return Math.abs(normal[2]) > Math.abs(normal[axis]) ? 2 : axis;
+  /** The axis along which the normal is shortest, and so one that is well away from it. */
+  private int shortest() {
+    int axis = Math.abs(normal[1]) < Math.abs(normal[0]) ? 1 : 0;
+    return Math.abs(normal[2]) < Math.abs(normal[axis]) ? 2 : axis;
+  }
+
+  private static double[] axis(int axis) {
+    double[] unit = new double[3];
+    unit[axis] = 1;
+    return unit;
+  }
+
+  private static double[] crossed(double[] a, double[] b) {
+    return new double[] {
+      a[1] * b[2] - a[2] * b[1], a[2] * b[0] - a[0] * b[2], a[0] * b[1] - a[1] * b[0]
+    };
+  }
+
+  private static double length(double[] a) {
+    return Math.sqrt(a[0] * a[0] + a[1] * a[1] + a[2] * a[2]);
   }
 
   /** Twice the area of a triangle, positive where it turns to the left. */

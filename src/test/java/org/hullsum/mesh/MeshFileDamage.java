@@ -120,7 +120,7 @@ final class MeshFileDamage {
   void once() throws IOException {
     int k = random.nextInt(sound.size());
     byte[] file = sound.get(k);
-    for (int times = 1 + random.nextInt(6); times > 0; times--) {
+    for (int times = 1 + random.nextInt(1 + random.nextInt(5)); times > 0; times--) {
       file = damaged(file);
     }
     if (random.nextInt(8) == 0) {
