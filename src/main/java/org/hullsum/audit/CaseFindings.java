@@ -84,6 +84,7 @@ final class CaseFindings {
                     audit.hasArea() ? patch.facingPlace() : patch.place(),
                     Map.of()));
     audit.fluxes().forEach(now -> now.forEach(flux -> addFlux(audit, flux, digits)));
+    patch.surface().ifPresent(surface -> findings.addAll(MeshFindings.of(patch, surface, scales)));
   }
 
   private boolean has(FindingCode code, String on) {

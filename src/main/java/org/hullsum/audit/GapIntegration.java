@@ -8,7 +8,6 @@ import java.util.OptionalDouble;
 import java.util.stream.Collectors;
 import org.hullsum.closure.Gap;
 import org.hullsum.expression.Expression;
-import org.hullsum.expression.VectorExpression;
 import org.hullsum.flux.BoundaryPatch;
 import org.hullsum.flux.FluxIntegrator;
 import org.hullsum.flux.FluxIntegrator.PreparedFlux;
@@ -17,21 +16,20 @@ import org.hullsum.flux.PatchGeometry;
 import org.hullsum.flux.PulledBackSurface;
 import org.hullsum.flux.VolumeIntegral;
 import org.hullsum.flux.VolumeIntegrator;
-import org.hullsum.geometry.DiskShape;
-import org.hullsum.geometry.Surface;
-import org.hullsum.geometry.SurfaceFault;
+import org.hullsum.mesh.TriangleMesh;
+import org.hullsum.mesh.TriangleMeshBuilder;
 import org.hullsum.model.FluxStatement;
 import org.hullsum.model.StatedFlux;
-import org.hullsum.problem.InternalFault;
+import org.hullsum.numeric.Vector3;
 
 /**
  * What would pass through the gaps of an open surface.
  *
- * <p>Over each rim a disk is laid that has the vector area and the centre of the fan over it, which
- * is exact for a plane gap and a field that is linear over it, whatever the outline.
+ * <p>Over each rim a fan of triangles from its centre is laid. Where the rim is plane it fills the
+ * gap.
  */
 final class GapIntegration {
-  /** What the gaps' outlines may do, of the throughput. */
+  /** What the fans' straight edges may do, of the throughput. */
   private static final double GAP_ERROR = 1e-6;
 
   private final InputSensitivity inputs;
@@ -57,8 +55,8 @@ final class GapIntegration {
    * @param gaps in working units
    * @param between the names of the patches on their rims
    * @param fluxes outward through each, at the first instant
-   * @param outward flux through all disks
-   * @param divergence of the same fields in the region that the disks close
+   * @param outward flux through all fans
+   * @param divergence of the same fields in the region that the fans close
    */
   record GapAudit(
       List<Gap> gaps,
@@ -74,7 +72,7 @@ final class GapIntegration {
       divergence = List.copyOf(divergence);
     }
 
-    /** For the explanation of one balance; the residual then, with the gaps closed by disks. */
+    /** For the explanation of one balance; the residual then, with the gaps closed by fans. */
     Clues.Gap clue(BalanceSheet.Drawn drawn, int index, Scales scales) {
       Balance balance = drawn.balances().get(index);
       Estimate flux = drawn.at(index, outward);
@@ -111,9 +109,9 @@ final class GapIntegration {
     List<BoundaryPatch> closed = new ArrayList<>(audit.boundary());
     List<PreparedFlux> prepared = new ArrayList<>();
     for (Gap gap : gaps) {
-      PulledBackSurface disk = PulledBackSurface.of(disk(gap));
-      closed.add(new BoundaryPatch(disk, PatchGeometry.of(disk, inputs.values(), digits), 1));
-      carriers.forEach(c -> prepared.add(fluxes.prepare(Optional.of(disk), stated(c, audit))));
+      PulledBackSurface fan = PulledBackSurface.of(fan(gap));
+      closed.add(new BoundaryPatch(fan, PatchGeometry.of(fan, inputs.values(), digits), 1));
+      carriers.forEach(c -> prepared.add(fluxes.prepare(Optional.of(fan), stated(c, audit))));
     }
     Expression density = InteriorIntegration.density(carriers);
     List<Double> through = new ArrayList<>();
@@ -165,19 +163,15 @@ final class GapIntegration {
         audit.volume().place());
   }
 
-  private static Surface disk(Gap gap) {
-    DiskShape shape =
-        new DiskShape(
-            VectorExpression.of(gap.fanCentre()),
-            gap.vectorArea(),
-            Expression.number(Math.sqrt(gap.vectorArea().norm() / Math.PI)),
-            Optional.empty(),
-            Optional.empty(),
-            Optional.empty());
-    try {
-      return shape.surface(Map.of());
-    } catch (SurfaceFault e) {
-      throw new InternalFault("a gap is no disk: " + e.getMessage());
+  /** The triangles between the centre and the pieces of the outline. */
+  private static TriangleMesh fan(Gap gap) {
+    TriangleMeshBuilder builder = new TriangleMeshBuilder();
+    Vector3 c = gap.centre();
+    int centre = builder.vertex(c.x(), c.y(), c.z());
+    int[] rim = gap.outline().stream().mapToInt(p -> builder.vertex(p.x(), p.y(), p.z())).toArray();
+    for (int k = 0; k < rim.length; k++) {
+      builder.triangle(centre, rim[k], rim[(k + 1) % rim.length]);
     }
+    return builder.build(1);
   }
 }

@@ -1,5 +1,7 @@
 package org.hullsum.casefile;
 
+import java.nio.file.Path;
+import java.util.ArrayList;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Optional;
@@ -23,12 +25,21 @@ final class CaseBuilder {
   /** The format that this version reads. */
   static final String FORMAT = "hullsum-case/1";
 
+  private final DataFiles files;
   private final FileTextReader.Content content;
   private final ReadOptions options;
   private final ProblemAccumulator problems;
   private final ValueReader values;
 
-  CaseBuilder(FileTextReader.Content content, ReadOptions options, ProblemAccumulator problems) {
+  /**
+   * @param folder of the case file
+   */
+  CaseBuilder(
+      FileTextReader.Content content,
+      Path folder,
+      ReadOptions options,
+      ProblemAccumulator problems) {
+    this.files = new DataFiles(folder, options.allowedOutside(), problems);
     this.content = content;
     this.options = options;
     this.problems = problems;
@@ -60,7 +71,7 @@ final class CaseBuilder {
     CorrelationReader correlations = new CorrelationReader(formulas);
     FluxReader fluxes = new FluxReader(formulas, fields, measured, correlations, rates);
     PatchReader patchReader =
-        new PatchReader(formulas, fields, measured, fluxes, volumeReader, rates);
+        new PatchReader(formulas, files, fields, measured, fluxes, volumeReader, rates);
     List<Patch> patches = top.require("patches").map(patchReader::readAll).orElse(List.of());
     List<Inputs.Correlation> correlated = correlations.resolve(patchReader.names());
     List<Envelope> envelopes =
@@ -91,8 +102,15 @@ final class CaseBuilder {
             fields.places(),
             problems.warnings(),
             scope.notes(),
-            List.of(new Case.SourceFile(options.name(), content.digest().text())),
+            sources(),
             scope.usedNames()));
+  }
+
+  private List<Case.SourceFile> sources() {
+    List<Case.SourceFile> sources = new ArrayList<>();
+    sources.add(new Case.SourceFile(options.name(), content.digest().text()));
+    sources.addAll(files.sources());
+    return sources;
   }
 
   /** Reads tolerances whose defaults are those of the case. */

@@ -23,9 +23,15 @@ public final class CaseReader {
         content.flatMap(
             c ->
                 YamlReader.read(c.source(), problems)
-                    .flatMap(map -> new CaseBuilder(c, options, problems).build(map)));
+                    .flatMap(
+                        map -> new CaseBuilder(c, folderOf(file), options, problems).build(map)));
     return found.isPresent() && problems.fatalCount() == 0
         ? new ReadOutcome(found, List.of())
         : new ReadOutcome(Optional.empty(), problems.all());
+  }
+
+  private static Path folderOf(Path file) {
+    Path parent = file.toAbsolutePath().getParent();
+    return parent == null ? file.toAbsolutePath() : parent;
   }
 }

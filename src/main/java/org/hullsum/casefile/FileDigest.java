@@ -1,8 +1,14 @@
 package org.hullsum.casefile;
 
+import java.io.ByteArrayInputStream;
+import java.io.IOException;
+import java.io.InputStream;
+import java.nio.file.Files;
+import java.nio.file.Path;
 import java.security.MessageDigest;
 import java.security.NoSuchAlgorithmException;
 import java.util.HexFormat;
+import java.util.concurrent.Callable;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.FutureTask;
 import org.hullsum.problem.InternalFault;
@@ -12,6 +18,8 @@ import org.hullsum.problem.InternalFault;
  * costs as much time as reading a small case does.
  */
 final class FileDigest {
+  private static final int BLOCK = 1 << 16;
+
   private final FutureTask<String> task;
 
   private FileDigest(FutureTask<String> task) {
@@ -20,7 +28,21 @@ final class FileDigest {
 
   /** Begins; the bytes must not change from now on. */
   static FileDigest of(byte[] bytes) {
-    FutureTask<String> task = new FutureTask<>(() -> sha256(bytes));
+    return begun(() -> sha256(new ByteArrayInputStream(bytes)));
+  }
+
+  /** Begins; the file is read by itself. */
+  static FileDigest of(Path file) {
+    return begun(
+        () -> {
+          try (InputStream in = Files.newInputStream(file)) {
+            return sha256(in);
+          }
+        });
+  }
+
+  private static FileDigest begun(Callable<String> work) {
+    FutureTask<String> task = new FutureTask<>(work);
     Thread thread = new Thread(task, "digest");
     thread.setDaemon(true);
     thread.start();
@@ -39,9 +61,14 @@ final class FileDigest {
     }
   }
 
-  private static String sha256(byte[] bytes) {
+  private static String sha256(InputStream in) throws IOException {
     try {
-      return HexFormat.of().formatHex(MessageDigest.getInstance("SHA-256").digest(bytes));
+      MessageDigest digest = MessageDigest.getInstance("SHA-256");
+      byte[] block = new byte[BLOCK];
+      for (int count = in.read(block); count >= 0; count = in.read(block)) {
+        digest.update(block, 0, count);
+      }
+      return HexFormat.of().formatHex(digest.digest());
     } catch (NoSuchAlgorithmException e) {
       throw new InternalFault("every Java platform has SHA-256: " + e.getMessage());
     }

@@ -29,6 +29,7 @@ final class PatchReader {
 
   PatchReader(
       FormulaReader formulas,
+      DataFiles files,
       FieldReader fields,
       MeasuredReader measured,
       FluxReader fluxes,
@@ -36,7 +37,7 @@ final class PatchReader {
       Rates rates) {
     this.values = formulas.values();
     this.problems = values.problems();
-    this.surfaces = new SurfaceReader(formulas);
+    this.surfaces = new SurfaceReader(formulas, files);
     this.facings = new FacingReader(formulas);
     this.fields = fields;
     this.measured = measured;

@@ -42,9 +42,10 @@ enum Section {
   WAIVER("a waiver", "finding where because by until", ""),
   SURFACE(
       "`surface`",
-      "polygon rectangle disk cylinder cone sphere ellipsoid torus graph parametric revolution"
+      "polygon rectangle disk cylinder cone sphere ellipsoid torus graph parametric revolution mesh"
           + " placed trim",
-      "mesh"),
+      ""),
+  MESH("`mesh`", "file part unit scale", ""),
   POLYGON("`polygon`", "points", ""),
   RECTANGLE("`rectangle`", "corner edges", ""),
   DISK("`disk`", "centre normal radius hole sector zero", ""),

@@ -3,16 +3,16 @@ package org.hullsum.casefile;
 import java.util.Optional;
 import org.hullsum.expression.Expression;
 import org.hullsum.expression.VectorExpression;
-import org.hullsum.geometry.Surface;
+import org.hullsum.model.PatchSurface;
 
 /**
  * A surface that was read.
  *
- * @param surface empty where it can't be built because a parameter was refused
+ * @param patchSurface empty where it can't be built because something was refused
  * @param kind the word of the format
  * @param disk what a velocity profile needs to know, for a disk in its place
  */
-record SurfaceEntry(Optional<Surface> surface, String kind, Optional<Disk> disk) {
+record SurfaceEntry(Optional<PatchSurface> patchSurface, String kind, Optional<Disk> disk) {
   /**
    * A disk.
    *

@@ -11,6 +11,7 @@ import org.hullsum.geometry.Shape;
 import org.hullsum.geometry.Surface;
 import org.hullsum.geometry.SurfaceFault;
 import org.hullsum.geometry.Trim;
+import org.hullsum.model.PatchSurface;
 import org.hullsum.problem.Place;
 import org.hullsum.problem.ProblemKind;
 
@@ -23,10 +24,12 @@ final class SurfaceReader {
   private final ShapeReader shapes;
   private final FormulaShapeReader formulaShapes;
   private final BodyReader bodies;
+  private final MeshSurfaceReader meshes;
   private final ProblemAccumulator problems;
 
-  SurfaceReader(FormulaReader formulas) {
+  SurfaceReader(FormulaReader formulas, DataFiles files) {
     this.parts = new PartReader(formulas);
+    this.meshes = new MeshSurfaceReader(formulas, files);
     this.shapes = new ShapeReader(parts);
     this.formulaShapes = new FormulaShapeReader(parts);
     this.bodies = new BodyReader(parts);
@@ -55,6 +58,9 @@ final class SurfaceReader {
     String kind = kinds.get(0);
     Optional<MapReader> measures =
         map.get(kind).flatMap(v -> parts.values().section(v, section(kind)));
+    if (kind.equals("mesh")) {
+      return mesh(measures, map);
+    }
     Optional<? extends Shape> shape = measures.flatMap(m -> shape(kind, m));
     Optional<Placement> placement = map.get("placed").flatMap(this::placement);
     Optional<Trim> trim = map.get("trim").flatMap(this::trim);
@@ -68,7 +74,23 @@ final class SurfaceReader {
             .map(d -> placed(d, placement));
     return Optional.of(
         new SurfaceEntry(
-            build(new Plan(shape.get(), placement, trim), measures.get(), map), kind, disk));
+            build(new Plan(shape.get(), placement, trim), measures.get(), map)
+                .map(PatchSurface.Formulas::new),
+            kind,
+            disk));
+  }
+
+  private Optional<SurfaceEntry> mesh(Optional<MapReader> measures, MapReader map) {
+    for (String key : List.of("placed", "trim")) {
+      if (map.has(key)) {
+        problems.add(
+            ProblemKind.WRONG_VALUE,
+            map.placeOfKey(key),
+            "`" + key + "` is for surfaces given by formulas; a mesh is used as its file has it");
+        return Optional.empty();
+      }
+    }
+    return measures.map(m -> new SurfaceEntry(meshes.read(m), "mesh", Optional.empty()));
   }
 
   private static Section section(String kind) {
@@ -83,6 +105,7 @@ final class SurfaceReader {
       case "torus" -> Section.TORUS;
       case "graph" -> Section.GRAPH;
       case "parametric" -> Section.PARAMETRIC;
+      case "mesh" -> Section.MESH;
       default -> Section.REVOLUTION;
     };
   }

@@ -5,7 +5,6 @@ import java.util.List;
 import java.util.Map;
 import org.hullsum.geometry.ChartEvaluator;
 import org.hullsum.geometry.ChartPoint;
-import org.hullsum.geometry.Crossing;
 import org.hullsum.geometry.Crossings;
 import org.hullsum.geometry.LineCrossings;
 import org.hullsum.geometry.Surface;

@@ -38,18 +38,4 @@ public record Gap(
   public Gap lyingOn(int patch) {
     return new Gap(patches, length, centre, vectorArea, outline, whole, patch);
   }
-
-  /** ∬ r dS / ∬ dS of the fan from the centre over the rim, by its parts along the vector area. */
-  public Vector3 fanCentre() {
-    Vector3 sum = Vector3.ZERO;
-    double weight = 0;
-    for (int k = 0; k < outline.size(); k++) {
-      Vector3 a = outline.get(k).minus(centre);
-      Vector3 b = outline.get((k + 1) % outline.size()).minus(centre);
-      double part = a.cross(b).dot(vectorArea);
-      sum = sum.plus(a.plus(b).times(part / 3));
-      weight += part;
-    }
-    return weight == 0 ? centre : centre.plus(sum.times(1 / weight));
-  }
 }

@@ -24,8 +24,14 @@ public final class Rim {
   /** A turn from one piece to the next from which it may be a corner, in radians. */
   private static final double CORNER = 0.05;
 
+  /** A turn of straight pieces from which it is a corner of what they stand for, in radians. */
+  private static final double SHARP = 0.9;
+
   /** How many times as sharp as the turns beside it a corner is. */
   private static final double SHARPER = 4;
+
+  /** Points of an outline on each smooth piece. */
+  private static final int PARTS = 16;
 
   /** Nodes and weights of Gauss's rule on three points over 0 … 1. */
   private static final double[] GAUSS = {0.5 - Math.sqrt(0.15), 0.5, 0.5 + Math.sqrt(0.15)};
@@ -164,6 +170,27 @@ public final class Rim {
     Vector3 before = point(k).minus(point(k - 1));
     Vector3 after = point(k + 1).minus(point(k));
     return Math.atan2(before.cross(after).norm(), before.dot(after));
+  }
+
+  /**
+   * How far the curve for which it stands may leave its straight pieces: of a circle cut at equal
+   * angles as far as it does. Nothing for a smooth one, and at corners.
+   */
+  double sag() {
+    double sag = 0;
+    for (int k = 0; k < points.size() && !smooth; k++) {
+      double turn = turn(k);
+      if (turn < SHARP) {
+        double longer = Math.max(chord(k - 1), chord(k));
+        sag = Math.max(sag, longer * turn / 8);
+      }
+    }
+    return sag;
+  }
+
+  /** The length of the piece behind a point; 0 where there is none. */
+  private double chord(int k) {
+    return closed || (k >= 0 && k < points.size() - 1) ? point(k + 1).minus(point(k)).norm() : 0;
   }
 
   /** The parameters of the ends and of the corners. */
@@ -329,15 +356,19 @@ public final class Rim {
     }
   }
 
-  /** The points that a stretch runs through, its own ends included. */
+  /** Points along a stretch, its ends included; of a smooth one several on each piece. */
   List<Vector3> pointsBetween(double from, double to) {
     List<Vector3> between = new ArrayList<>();
     between.add(at(from));
     int first = closed ? (int) Math.floor(from / length()) * points.size() : 0;
     int last = closed ? first + 2 * points.size() : points.size() - 1;
-    for (int k = first; k <= last; k++) {
-      if (parameter(k) > from && parameter(k) < to) {
-        between.add(point(k));
+    int parts = smooth ? PARTS : 1;
+    for (int k = first; k < last; k++) {
+      for (int j = 0; j < parts; j++) {
+        double s = parameter(k) + j * (parameter(k + 1) - parameter(k)) / parts;
+        if (s > from && s < to) {
+          between.add(j == 0 ? point(k) : at(s));
+        }
       }
     }
     between.add(at(to));

@@ -34,6 +34,8 @@ public final class SeamFinder {
   private final List<Rim> rims = new ArrayList<>();
   private final int[] patchOf;
   private final double[] sizes;
+  private final double[] sags;
+  private final double largestSize;
   private final double largest;
   private final RimTree tree;
 
@@ -45,15 +47,21 @@ public final class SeamFinder {
   public SeamFinder(List<PatchRims> patches) {
     this.patchOf = new int[patches.stream().mapToInt(p -> p.rims().size()).sum()];
     this.sizes = patches.stream().mapToDouble(PatchRims::size).toArray();
-    double largestSize = 0;
+    double sizeOfAll = 0;
     for (int p = 0; p < patches.size(); p++) {
       for (Rim rim : patches.get(p).rims()) {
         patchOf[rims.size()] = p;
         rims.add(rim);
-        largestSize = Math.max(largestSize, sizes[p]);
+        sizeOfAll = Math.max(sizeOfAll, sizes[p]);
       }
     }
-    this.largest = TOLERANCE * largestSize;
+    this.sags = rims.stream().mapToDouble(Rim::sag).toArray();
+    double largestSag = 0;
+    for (double sag : sags) {
+      largestSag = Math.max(largestSag, sag);
+    }
+    this.largestSize = sizeOfAll;
+    this.largest = TOLERANCE * sizeOfAll + 2 * largestSag;
     this.tree = new RimTree(rims);
   }
 
@@ -82,11 +90,19 @@ public final class SeamFinder {
       }
     }
     return new Seams(
-        seams, new GapTracer(rims, patchOf, signs, largest).gaps(free), slack, slackArea);
+        seams,
+        new GapTracer(rims, patchOf, signs, TOLERANCE * largestSize).gaps(free),
+        slack,
+        slackArea);
   }
 
   /** How near two rims must run: tied to the smaller patch. */
   private double tolerance(int one, int other) {
+    return joint(one, other) + sags[one] + sags[other];
+  }
+
+  /** How near two cuts are one. */
+  private double joint(int one, int other) {
     return TOLERANCE * Math.min(sizes[patchOf[one]], sizes[patchOf[other]]);
   }
 
@@ -98,7 +114,7 @@ public final class SeamFinder {
       double tolerance = tolerance(index, hit.rim());
       boolean self =
           hit.rim() == index
-              && RimTree.apart(rim, hit.parameter(), rim.reduced(s)) <= 8 * tolerance;
+              && RimTree.apart(rim, hit.parameter(), rim.reduced(s)) <= 8 * joint(index, hit.rim());
       if (!self && hit.distance() <= tolerance) {
         company.add(hit);
       }
@@ -128,7 +144,9 @@ public final class SeamFinder {
     for (double part : PROBES) {
       // Between the given points a rim is known less well than seams are asked to fit.
       for (RimTree.Hit hit : company(rim, stretch.rim(), rim.snapped(stretch.at(part)))) {
-        slack = Math.max(slack, hit.distance());
+        boolean sameKind = sags[stretch.rim()] > 0 == sags[hit.rim()] > 0;
+        double between = sameKind ? 0 : Math.max(sags[stretch.rim()], sags[hit.rim()]);
+        slack = Math.max(slack, Math.max(between, hit.distance()));
       }
     }
     return new Seam(sides, stretch.length(), slack);
@@ -170,7 +188,7 @@ public final class SeamFinder {
       for (double joint : own.get(r)) {
         for (RimTree.Hit hit : company(rims.get(r), r, joint)) {
           Rim other = rims.get(hit.rim());
-          double near = 8 * tolerance(r, hit.rim());
+          double near = 8 * joint(r, hit.rim());
           boolean known =
               cuts.get(hit.rim()).stream()
                   .anyMatch(c -> RimTree.apart(other, c, hit.parameter()) <= near);

@@ -43,8 +43,7 @@ final class MeshCone implements Cone {
     Integral[] parts = new Integral[rows];
     boolean finite = integrator.nonFiniteAt().isEmpty();
     integrator.nonFiniteAt().ifPresent(place -> bad = place);
-    double allowed =
-        Math.max(accuracy.absolute(), accuracy.relative() * integrator.magnitude());
+    double allowed = Math.max(accuracy.absolute(), accuracy.relative() * integrator.magnitude());
     for (int k = 0; k < rows; k++) {
       parts[k] =
           new Integral(
@@ -71,7 +70,7 @@ final class MeshCone implements Cone {
   public double[][] lattice(Vector3 from, int n) {
     double[][] lattice = new double[4][n * n];
     for (int i = 0; i < n * n; i++) {
-      int t = (int) ((long) i * mesh.triangleCount() / (n * n));
+      int t = (int) ((long) i * mesh.triangleCount() / ((long) n * n));
       Vector3 middle =
           mesh.vertex(mesh.corner(t, 0))
               .plus(mesh.vertex(mesh.corner(t, 1)))

@@ -16,8 +16,8 @@ import org.hullsum.numeric.Vector3;
 import org.hullsum.quadrature.Integral;
 
 /**
- * The flux of a field, or of a density along the normal, through the triangles of a mesh. Derivatives
- * by the inputs come along. Not thread-safe.
+ * The flux of a field, or of a density along the normal, through the triangles of a mesh.
+ * Derivatives by the inputs come along. Not thread-safe.
  */
 final class MeshFlux implements FluxIntegrator.PreparedFlux {
   private static final long LIMIT = 20_000_000;
@@ -77,11 +77,11 @@ final class MeshFlux implements FluxIntegrator.PreparedFlux {
   public PatchFlux at(OptionalDouble instant) {
     Vector3 low = mesh.low();
     double size = mesh.high().minus(low).norm();
-    int block = MeshIntegrator.BLOCK * (TriangleRule.DEGREE_5.size() + TriangleRule.DEGREE_8.size());
+    int block =
+        MeshIntegrator.BLOCK * (TriangleRule.DEGREE_5.size() + TriangleRule.DEGREE_8.size());
     Densities evaluated = new Densities(formulas, inputs.values(), instant, size, block);
     OptionalInt degree = evaluated.degree();
-    MeshIntegrator integrator =
-        new MeshIntegrator(new Dotted(evaluated, block), degree.orElse(-1));
+    MeshIntegrator integrator = new MeshIntegrator(new Dotted(evaluated, block), degree.orElse(-1));
     long limit = Math.max(LIMIT, EACH * mesh.triangleCount());
     integrator.integrate(mesh, relative, Double.MIN_NORMAL, limit);
     boolean finite = integrator.nonFiniteAt().isEmpty();

@@ -12,8 +12,8 @@ import org.hullsum.numeric.Vector3;
  * <p>Where the integrand is a polynomial whose degree is known one rule is exact. Otherwise each
  * triangle is done by rules of degree 5 and 8; their difference is taken for the error, and
  * triangles that take more than their share of what is allowed are divided into four, level by
- * level. Triangles are taken in blocks and sums compensated block by block, so that the result
- * does not depend on anything else. Not thread-safe.
+ * level. Triangles are taken in blocks and sums compensated block by block, so that the result does
+ * not depend on anything else. Not thread-safe.
  */
 final class MeshIntegrator {
   /** Triangles of one block. */
@@ -71,9 +71,7 @@ final class MeshIntegrator {
 
   private static TriangleRule[] rules(int degree) {
     for (TriangleRule rule :
-        new TriangleRule[] {
-          TriangleRule.CENTROID, TriangleRule.DEGREE_5, TriangleRule.DEGREE_8
-        }) {
+        new TriangleRule[] {TriangleRule.CENTROID, TriangleRule.DEGREE_5, TriangleRule.DEGREE_8}) {
       if (degree >= 0 && degree <= rule.degree()) {
         return new TriangleRule[] {rule};
       }

@@ -48,6 +48,11 @@ public final class PulledBackSurface {
         });
   }
 
+  /** Of triangles. */
+  public static PulledBackSurface of(TriangleMesh mesh) {
+    return new PulledBackSurface(Optional.empty(), List.of(), Optional.of(TriangleTree.of(mesh)));
+  }
+
   /** The formulas; empty where it is of triangles. */
   Optional<Surface> surface() {
     return surface;

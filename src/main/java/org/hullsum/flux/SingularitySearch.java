@@ -69,7 +69,9 @@ public final class SingularitySearch {
       // The box around the triangles holds more than them, so only absence can be shown.
       Box3 box = MeshSums.box(surface.mesh().get());
       SingularityOutcome around = new HazardSearch(new BoxDomain(box), check).run();
-      return around.isProvedAbsent() ? around : new SingularityOutcome.NotExcluded(box.centre(), "a part of it is zero");
+      return around.isProvedAbsent()
+          ? around
+          : new SingularityOutcome.NotExcluded(box.centre(), "a part of it is zero");
     }
     for (PulledBackChart chart : surface.charts()) {
       SingularityOutcome outcome = new HazardSearch(new ChartDomain(chart, values), check).run();

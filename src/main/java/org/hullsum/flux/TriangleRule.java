@@ -7,8 +7,8 @@ import java.util.List;
  * A symmetric rule over a triangle: points by barycentric coordinates, weights that sum to 1.
  *
  * <p>Degree 5 on 7 points: J. Radon, "Zur mechanischen Kubatur", Monatshefte für Mathematik 52
- * (1948) 286–300. Degree 8 on 16 points: D. A. Dunavant, "High degree efficient symmetrical Gaussian
- * quadrature rules for the triangle", Int. J. Numer. Methods Eng. 21 (1985) 1129–1148.
+ * (1948) 286–300. Degree 8 on 16 points: D. A. Dunavant, "High degree efficient symmetrical
+ * Gaussian quadrature rules for the triangle", Int. J. Numer. Methods Eng. 21 (1985) 1129–1148.
  */
 final class TriangleRule {
   static final TriangleRule CENTROID = new TriangleRule(1).centre(1);

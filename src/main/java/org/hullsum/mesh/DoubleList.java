@@ -1,7 +1,5 @@
 package org.hullsum.mesh;
 
-import java.util.Arrays;
-
 /** Numbers, as many as have been read; grows with the file, never with a count in it. */
 final class DoubleList {
   private double[] values = new double[64];
@@ -17,7 +15,7 @@ final class DoubleList {
 
   void add(double value, FaultPlace place) throws MeshFault {
     if (size == values.length) {
-      values = Arrays.copyOf(values, IntList.moreRoom(size, place));
+      values = Growth.grown(values, place);
     }
     values[size++] = value;
   }

@@ -7,8 +7,8 @@ import java.util.BitSet;
  * Which half-edges of a mesh lie on the same edge. Half-edge 3t + k runs from corner k of triangle
  * t to its next corner.
  *
- * <p>Half-edges are sorted into buckets by the smaller of their two vertices, and compared within
- * them: linear for meshes of bounded valence.
+ * <p>Half-edges are sorted into buckets by the smaller of their two vertices, and each bucket by
+ * the larger: O(n log n) whatever the valence.
  */
 final class EdgePairing {
   /** No other half-edge lies on the edge. */
@@ -19,6 +19,9 @@ final class EdgePairing {
 
   /** An edge of a triangle whose two ends are one vertex, or of one that is left out. */
   static final int NONE = -3;
+
+  /** A bucket up to this size is sorted by insertion. */
+  private static final int SMALL = 32;
 
   private final int[] mates;
   private final int crowdedEdges;
@@ -41,6 +44,14 @@ final class EdgePairing {
     return mesh.corner(after / 3, after % 3);
   }
 
+  private static int larger(TriangleMesh mesh, int half) {
+    return Math.max(from(mesh, half), to(mesh, half));
+  }
+
+  private static int smaller(TriangleMesh mesh, int half) {
+    return Math.min(from(mesh, half), to(mesh, half));
+  }
+
   /**
    * Pairs them.
    *
@@ -50,53 +61,73 @@ final class EdgePairing {
     int halves = 3 * mesh.triangleCount();
     int[] starts = new int[mesh.vertexCount() + 2];
     for (int h = 0; h < halves; h++) {
-      starts[Math.min(from(mesh, h), to(mesh, h)) + 2]++;
+      starts[smaller(mesh, h) + 2]++;
     }
     for (int v = 2; v < starts.length; v++) {
       starts[v] += starts[v - 1];
     }
     int[] sorted = new int[halves];
     for (int h = 0; h < halves; h++) {
-      sorted[starts[Math.min(from(mesh, h), to(mesh, h)) + 1]++] = h;
+      sorted[starts[smaller(mesh, h) + 1]++] = h;
     }
     int[] mates = new int[halves];
     Arrays.fill(mates, NONE);
     int crowded = 0;
     for (int v = 0; v < mesh.vertexCount(); v++) {
-      for (int i = starts[v]; i < starts[v + 1]; i++) {
-        crowded += pair(mesh, sorted, i, starts[v + 1], leftOut, mates) ? 1 : 0;
-      }
+      crowded += pair(mesh, sorted, starts[v], starts[v + 1], leftOut, mates);
     }
     return new EdgePairing(mates, crowded);
   }
 
-  /** Finds all that lie on the edge of one half-edge, unless that was done; whether crowded. */
-  private static boolean pair(
-      TriangleMesh mesh, int[] sorted, int i, int end, BitSet leftOut, int[] mates) {
-    int h = sorted[i];
-    int a = from(mesh, h);
-    int b = to(mesh, h);
-    if (a == b || mates[h] != NONE || leftOut.get(h / 3)) {
-      return false;
-    }
-    int other = Math.max(a, b);
-    int found = 0;
-    int last = BOUNDARY;
-    for (int j = i + 1; j < end; j++) {
-      int g = sorted[j];
-      if (Math.max(from(mesh, g), to(mesh, g)) == other && !leftOut.get(g / 3)) {
-        found++;
-        last = g;
+  /** Pairs the half-edges of one bucket; how many edges are crowded. */
+  private static int pair(
+      TriangleMesh mesh, int[] sorted, int start, int end, BitSet leftOut, int[] mates) {
+    sort(mesh, sorted, start, end);
+    int crowded = 0;
+    int i = start;
+    while (i < end) {
+      int other = larger(mesh, sorted[i]);
+      int count = 0;
+      int j = i;
+      for (; j < end && larger(mesh, sorted[j]) == other; j++) {
+        int h = sorted[j];
+        if (from(mesh, h) != to(mesh, h) && !leftOut.get(h / 3)) {
+          // Those that count are brought to the front of their run.
+          sorted[j] = sorted[i + count];
+          sorted[i + count++] = h;
+        }
       }
-    }
-    mates[h] = found == 0 ? BOUNDARY : found == 1 ? last : CROWDED;
-    for (int j = i + 1; j < end && found > 0; j++) {
-      int g = sorted[j];
-      if (Math.max(from(mesh, g), to(mesh, g)) == other && !leftOut.get(g / 3)) {
-        mates[g] = found == 1 ? h : CROWDED;
+      for (int k = i; k < i + count; k++) {
+        mates[sorted[k]] = count == 1 ? BOUNDARY : count == 2 ? sorted[2 * i + 1 - k] : CROWDED;
       }
+      crowded += count > 2 ? 1 : 0;
+      i = j;
     }
-    return found > 1;
+    return crowded;
+  }
+
+  /** By the larger vertex, then by the half-edge. */
+  private static void sort(TriangleMesh mesh, int[] sorted, int start, int end) {
+    if (end - start > SMALL) {
+      long[] keys = new long[end - start];
+      for (int i = start; i < end; i++) {
+        keys[i - start] = (long) larger(mesh, sorted[i]) << 32 | sorted[i];
+      }
+      Arrays.sort(keys);
+      for (int i = start; i < end; i++) {
+        sorted[i] = (int) keys[i - start];
+      }
+      return;
+    }
+    for (int i = start + 1; i < end; i++) {
+      int h = sorted[i];
+      int key = larger(mesh, h);
+      int j = i - 1;
+      for (; j >= start && larger(mesh, sorted[j]) > key; j--) {
+        sorted[j + 1] = sorted[j];
+      }
+      sorted[j + 1] = h;
+    }
   }
 
   /** The other half-edge on the edge, or {@link #BOUNDARY}, {@link #CROWDED}, {@link #NONE}. */

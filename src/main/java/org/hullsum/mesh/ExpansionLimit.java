@@ -8,7 +8,7 @@ package org.hullsum.mesh;
  */
 final class ExpansionLimit {
   /** Bytes that any file may unpack to. */
-  static final long ALWAYS = 64L << 20;
+  static final long ALWAYS = 16L << 20;
 
   /** How many times its packed size a file may unpack to, beyond that. */
   static final long RATIO = 200;

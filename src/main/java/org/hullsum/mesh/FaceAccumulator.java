@@ -1,7 +1,5 @@
 package org.hullsum.mesh;
 
-import java.util.Arrays;
-
 /**
  * Takes the points and faces of a file that numbers its points, divides the faces into triangles
  * and tells them to the sink. A face is given corner by corner, then told what it is.
@@ -30,10 +28,7 @@ final class FaceAccumulator {
     }
     int at = 3 * vertices.size();
     if (at + 3 > coordinates.length) {
-      coordinates = Arrays.copyOf(coordinates, IntList.moreRoom(coordinates.length, place));
-      if (at + 3 > coordinates.length) {
-        throw place.fault("more than " + vertices.size() + " points are not read");
-      }
+      coordinates = Growth.grown(coordinates, place);
     }
     coordinates[at] = x;
     coordinates[at + 1] = y;

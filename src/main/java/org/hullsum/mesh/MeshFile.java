@@ -11,11 +11,22 @@ import java.nio.file.Path;
  * only where that does not say by the ending of its name. Offsets in faults of a packed file count
  * the bytes as unpacked.
  */
-final class MeshFile {
+public final class MeshFile {
   private static final int GZIP_MAGIC_1 = 0x1f;
   private static final int GZIP_MAGIC_2 = 0x8b;
 
   private MeshFile() {}
+
+  /**
+   * Reads a file.
+   *
+   * @return what was gathered, to be scaled and built
+   */
+  public static TriangleMeshBuilder read(Path path) throws IOException, MeshFault {
+    TriangleMeshBuilder builder = new TriangleMeshBuilder();
+    read(path, StlReader::read, builder);
+    return builder;
+  }
 
   /**
    * Reads a file.

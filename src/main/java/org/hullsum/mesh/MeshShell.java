@@ -9,8 +9,15 @@ package org.hullsum.mesh;
  * @param orientable whether they can be turned so that all agree
  * @param toTurn number of triangles to be turned: in a closed shell to face outward, in an open one
  *     to agree
+ * @param against number of triangles that face against the others of the shell, the fewer
  * @param volume that the triangles, turned, enclose with their first corner: of a closed shell the
  *     volume inside
  */
 public record MeshShell(
-    int first, int triangles, boolean closed, boolean orientable, int toTurn, double volume) {}
+    int first,
+    int triangles,
+    boolean closed,
+    boolean orientable,
+    int toTurn,
+    int against,
+    double volume) {}

@@ -141,7 +141,13 @@ public final class MeshTopology {
     }
     int toTurn = turnAll ? size - against : against;
     return new MeshShell(
-        seed, size, closed, orientable, orientable ? toTurn : 0, Math.abs(sums.volume()));
+        seed,
+        size,
+        closed,
+        orientable,
+        orientable ? toTurn : 0,
+        Math.min(against, size - against),
+        Math.abs(sums.volume()));
   }
 
   public TriangleMesh mesh() {

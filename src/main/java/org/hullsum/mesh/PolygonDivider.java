@@ -21,6 +21,9 @@ final class PolygonDivider {
   /** Larger polygons are divided only when convex, since cutting ears takes too long. */
   static final int MOST_CORNERS = 2048;
 
+  /** No polygon may have more: such a list of corners is a damaged count. */
+  static final int MOST_CORNERS_CONVEX = 1 << 16;
+
   /** Twice the area, of a polygon scaled to size 1, under which a corner counts as straight. */
   private static final double STRAIGHT = 1e-12;
 
@@ -53,6 +56,9 @@ final class PolygonDivider {
     if (size == 3) {
       sink.triangle(polygon[0], polygon[1], polygon[2]);
       return;
+    }
+    if (size > MOST_CORNERS_CONVEX) {
+      throw place.fault("a polygon of " + size + " corners is not read");
     }
     corners = polygon;
     count = size;
@@ -238,7 +244,12 @@ final class PolygonDivider {
         left--;
         misses = 0;
         flatToo = false;
-      } else if (++misses == left) {
+        // Beside an ear that is gone is the likeliest place for the next.
+        at = previous[at];
+        continue;
+      }
+      misses++;
+      if (misses == left) {
         if (flatToo) {
           throw place.fault("a polygon of " + count + " corners touches or crosses itself");
         }

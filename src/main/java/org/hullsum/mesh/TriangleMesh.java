@@ -76,9 +76,7 @@ public final class TriangleMesh {
   }
 
   private Vector3 extreme(int sign) {
-    double[] least = {
-      Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY
-    };
+    double[] least = {Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY};
     for (int k = 0; k < coordinates.length; k++) {
       least[k % 3] = Math.min(least[k % 3], sign * coordinates[k]);
     }

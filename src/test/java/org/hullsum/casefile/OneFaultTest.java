@@ -142,12 +142,6 @@ class OneFaultTest {
             ProblemKind.WRONG_VALUE,
             "disk and sphere"),
         fault(
-            "mesh",
-            "{disk: {centre: [9, 0, 0], normal: [1, 0, 0], radius: 50 mm}}",
-            "{¤mesh: {file: a.stl}}",
-            ProblemKind.NOT_SUPPORTED,
-            "`mesh` in `surface` is not supported yet"),
-        fault(
             "outward",
             "facing: downward",
             "facing: ¤outward",

@@ -28,7 +28,7 @@ import org.junit.jupiter.params.provider.MethodSource;
 
 class FacingFinderTest {
   private static VolumeFacings find(List<Surface> surfaces) {
-    return new FacingFinder(surfaces, Map.of())
+    return new FacingFinder(surfaces.stream().map(s -> PatchProbe.of(s, Map.of())).toList())
         .find(IntStream.range(0, surfaces.size()).boxed().toList());
   }
 
@@ -102,7 +102,8 @@ class FacingFinderTest {
     List<Surface> surfaces = new ArrayList<>();
     lower.pieces().forEach(p -> surfaces.add(p.surface()));
     upper.pieces().subList(1, 6).forEach(p -> surfaces.add(p.surface()));
-    FacingFinder finder = new FacingFinder(surfaces, Map.of());
+    FacingFinder finder =
+        new FacingFinder(surfaces.stream().map(s -> PatchProbe.of(s, Map.of())).toList());
     VolumeFacings below = finder.find(List.of(0, 1, 2, 3, 4, 5));
     VolumeFacings above = finder.find(List.of(1, 6, 7, 8, 9, 10));
     FoundFacing fromBelow = below.facings().get(1);

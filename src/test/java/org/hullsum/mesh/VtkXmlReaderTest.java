@@ -7,6 +7,7 @@ import java.nio.ByteOrder;
 import java.nio.charset.StandardCharsets;
 import java.util.Arrays;
 import java.util.List;
+import java.util.zip.Deflater;
 import org.hullsum.mesh.VtkXmlFiles.Form;
 import org.hullsum.mesh.VtkXmlFiles.Style;
 import org.junit.jupiter.api.Test;
@@ -131,5 +132,32 @@ class VtkXmlReaderTest {
       })
   void documentTypesAreRefused(String declaration) {
     refused("<VTKFile", declaration + "<VTKFile", "document type");
+  }
+
+  @Test
+  void packedArrayThatGrowsBeyondAllBoundsIsRefused() {
+    Deflater deflater = new Deflater();
+    byte[] packed = new byte[1 << 12];
+    deflater.setInput(new byte[1 << 20]);
+    deflater.finish();
+    byte[] block = Arrays.copyOf(packed, deflater.deflate(packed));
+    deflater.end();
+    int blocks = 100;
+    ByteWriter file = new ByteWriter(ByteOrder.LITTLE_ENDIAN);
+    file.text("<VTKFile type='PolyData' compressor='vtkZLibDataCompressor'><PolyData>");
+    file.text("<Piece NumberOfPoints='99999999'><Points><DataArray type='Float32' offset='0'");
+    file.text(" format='appended'/></Points></Piece></PolyData><AppendedData encoding='raw'>_");
+    file.ints(blocks, 1 << 20, 0);
+    for (int k = 0; k < blocks; k++) {
+      file.ints(block.length);
+    }
+    byte[] head = file.toBytes();
+    byte[] whole = Arrays.copyOf(head, head.length + blocks * block.length);
+    for (int k = 0; k < blocks; k++) {
+      System.arraycopy(block, 0, whole, head.length + k * block.length, block.length);
+    }
+    MeshFault fault = MeshFaults.of(VtkXmlReader::read, whole);
+    assertTrue(fault.getMessage().contains("which no mesh would"), fault.getMessage());
+    assertTrue(fault.offset().isPresent());
   }
 }
