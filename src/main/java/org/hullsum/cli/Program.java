@@ -86,11 +86,36 @@ final class Program {
             .type(String.class)
             .description(StarterCase.kinds() + ".")
             .build());
+    root.addSubcommand("orient", orientCommand());
     root.addSubcommand("start", start);
     CommandSpec schema = withHelp(CommandSpec.create());
     schema.usageMessage().description("Prints the JSON Schema of the case format, for editors.");
     root.addSubcommand("schema", schema);
     return new CommandLine(root).setExpandAtFiles(false).setUsageHelpWidth(USAGE_WIDTH);
+  }
+
+  private static CommandSpec orientCommand() {
+    CommandSpec orient = withHelp(CommandSpec.create());
+    orient
+        .usageMessage()
+        .description(
+            "Writes the case with the facing corrected of every patch that was found to face"
+                + " inward, all else untouched: beside the original, as NAME-oriented.yaml.");
+    orient.addPositional(
+        PositionalParamSpec.builder()
+            .paramLabel("CASE")
+            .arity("1")
+            .required(true)
+            .type(String.class)
+            .description("A case file, format hullsum-case/1.")
+            .build());
+    orient.addOption(
+        OptionSpec.builder("--in-place")
+            .arity("0")
+            .type(boolean.class)
+            .description("Replaces the original.")
+            .build());
+    return orient;
   }
 
   private static CommandSpec withHelp(CommandSpec spec) {
@@ -146,6 +171,15 @@ final class Program {
     }
     return switch (command.getCommandName()) {
       case "audit" -> audit(AuditOptionsReader.read(command, parsed));
+      case "orient" ->
+          new OrientRun(
+                  parsed.matchedPositionalValue(0, ""),
+                  parsed.hasMatchedOption("--in-place"),
+                  out,
+                  err,
+                  clock,
+                  pipeline)
+              .run();
       case "start" -> start(command, parsed.matchedPositionalValue(0, ""));
       default -> schema();
     };

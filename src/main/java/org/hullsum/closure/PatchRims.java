@@ -37,7 +37,7 @@ public record PatchRims(double size, List<Rim> rims) {
     double chord = surface.trim().isPresent() ? TRIMMED_CHORD : CHORD;
     List<Rim> rims =
         BoundaryCurves.of(surface, parameters, chord * size).stream()
-            .map(curve -> new Rim(curve.points(), curve.closed(), true))
+            .map(curve -> Rim.smooth(curve.points(), curve.closed()))
             .toList();
     return new PatchRims(size, rims);
   }

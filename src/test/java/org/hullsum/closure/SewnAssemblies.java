@@ -8,6 +8,7 @@ import org.hullsum.expression.VectorExpression;
 import org.hullsum.flux.Assemblies;
 import org.hullsum.flux.Assemblies.Assembly;
 import org.hullsum.flux.Assemblies.Piece;
+import org.hullsum.geometry.Body;
 import org.hullsum.geometry.ConeShape;
 import org.hullsum.geometry.CylinderShape;
 import org.hullsum.geometry.DiskShape;
@@ -29,7 +30,7 @@ final class SewnAssemblies {
   /** One of any kind; moved at random where it has no trim, which stays where it is. */
   Assembly next() {
     Assembly plain =
-        switch (random.nextInt(8)) {
+        switch (random.nextInt(9)) {
           case 0 -> box();
           case 1 -> can();
           case 2 -> frustum();
@@ -37,6 +38,7 @@ final class SewnAssemblies {
           case 4 -> torus();
           case 5 -> nested();
           case 6 -> drilled();
+          case 7 -> ducted();
           default -> Assemblies.branch();
         };
     boolean trimmed = plain.pieces().stream().anyMatch(p -> p.surface().trim().isPresent());
@@ -271,5 +273,40 @@ final class SewnAssemblies {
     addDisks(Vector3.ZERO, Vector3.Z.negated(), outer, inner, pieces);
     addDisks(Vector3.Z.times(height), Vector3.Z, outer, inner, pieces);
     return new Assembly("drilled", pieces, Math.PI * (outer * outer - inner * inner) * height);
+  }
+
+  /** A box with a square duct on its roof, which is opened there. */
+  Assembly ducted() {
+    double a = 1 + size();
+    double b = 1 + size();
+    double side = 0.2 + 0.3 * random.nextDouble();
+    double x = 0.3 + 0.3 * random.nextDouble();
+    double y = 0.3 + 0.3 * random.nextDouble();
+    Vector3 along = Vector3.X.times(side);
+    Vector3 across = Vector3.Y.times(side);
+    Vector3 up = Vector3.Z.times(0.7);
+    Vector3 foot = new Vector3(x, y, 1);
+    List<Piece> pieces =
+        new ArrayList<>(Assemblies.box(Vector3.ZERO, new Vector3(a, b, 1)).pieces());
+    pieces.remove(1);
+    Body opening =
+        new Body.Box(
+            VectorExpression.of(foot.minus(up)),
+            VectorExpression.of(along),
+            VectorExpression.of(across),
+            VectorExpression.of(up.times(2)));
+    pieces.add(
+        new Piece(
+            Assemblies.trimmed(
+                Assemblies.rectangle(Vector3.Z, Vector3.X.times(a), Vector3.Y.times(b)),
+                List.of(),
+                List.of(opening)),
+            1));
+    pieces.add(new Piece(Assemblies.rectangle(foot, along, up), 1));
+    pieces.add(new Piece(Assemblies.rectangle(foot.plus(across), up, along), 1));
+    pieces.add(new Piece(Assemblies.rectangle(foot, up, across), 1));
+    pieces.add(new Piece(Assemblies.rectangle(foot.plus(along), across, up), 1));
+    pieces.add(new Piece(Assemblies.rectangle(foot.plus(up), along, across), 1));
+    return new Assembly("ducted", pieces, a * b + 0.7 * side * side);
   }
 }
