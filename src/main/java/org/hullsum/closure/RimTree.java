@@ -2,14 +2,16 @@ package org.hullsum.closure;
 
 import java.util.ArrayList;
 import java.util.Arrays;
-import java.util.Comparator;
 import java.util.List;
 import org.hullsum.numeric.Vector3;
 
 /** Finds the places of many rims that are near a point: a tree of boxes around their pieces. */
 final class RimTree {
-  /** Pieces that a leaf holds at most. */
-  private static final int LEAF = 8;
+  /** Neighbouring pieces of a rim that are one entry. */
+  private static final int RUN = 16;
+
+  /** Entries that a leaf holds at most. */
+  private static final int LEAF = 2;
 
   /** How far a piece may leave its chord, relative to the chord: it turns little between points. */
   private static final double SAG = 0.3;
@@ -21,7 +23,7 @@ final class RimTree {
   /** A place on a rim near a point that was asked for. */
   record Hit(int rim, double parameter, double distance) {}
 
-  private record Entry(int rim, int piece, Vector3 middle, double reach) {}
+  private record Entry(int rim, int from, int to, Vector3 middle, double reach) {}
 
   private static final class Node {
     private final double[] box;
@@ -53,14 +55,23 @@ final class RimTree {
     this.rims = List.copyOf(rims);
     for (int r = 0; r < rims.size(); r++) {
       Rim rim = rims.get(r);
-      for (int k = 0; k < rim.pieceCount(); k++) {
-        Vector3 a = rim.point(k);
-        Vector3 b = rim.point(k + 1);
-        double reach = (0.5 + SAG) * b.minus(a).norm();
-        entries.add(new Entry(r, k, a.plus(b).times(0.5), reach));
+      for (int k = 0; k < rim.pieceCount(); k += RUN) {
+        entries.add(entry(r, rim, k, Math.min(k + RUN, rim.pieceCount())));
       }
     }
     this.root = node(0, entries.size());
+  }
+
+  /** A ball around a run of pieces. */
+  private static Entry entry(int index, Rim rim, int from, int to) {
+    Vector3 middle = rim.point((from + to) / 2);
+    double reach = 0;
+    for (int k = from; k < to; k++) {
+      Vector3 a = rim.point(k);
+      double chord = rim.point(k + 1).minus(a).norm();
+      reach = Math.max(reach, a.minus(middle).norm() + (1 + SAG) * chord);
+    }
+    return new Entry(index, from, to, middle, reach);
   }
 
   private Node node(int from, int to) {
@@ -83,7 +94,7 @@ final class RimTree {
     int axis = widest;
     entries
         .subList(from, to)
-        .sort(Comparator.comparingDouble((Entry e) -> e.middle().component(axis)));
+        .sort((a, b) -> Double.compare(a.middle().component(axis), b.middle().component(axis)));
     int middle = (from + to) >>> 1;
     return new Node(box, from, to, node(from, middle), node(middle, to));
   }
@@ -96,7 +107,11 @@ final class RimTree {
     if (!entries.isEmpty()) {
       collect(root, p, distance, hits);
     }
-    hits.sort(Comparator.comparingInt(Hit::rim).thenComparingDouble(Hit::parameter));
+    hits.sort(
+        (a, b) ->
+            a.rim() == b.rim()
+                ? Double.compare(a.parameter(), b.parameter())
+                : Integer.compare(a.rim(), b.rim()));
     return merged(hits, distance);
   }
 
@@ -111,13 +126,23 @@ final class RimTree {
     }
     for (Entry entry : entries.subList(node.from, node.to)) {
       if (entry.middle().minus(p).norm() <= entry.reach() + distance) {
-        Rim rim = rims.get(entry.rim());
-        double s = rim.nearest(p, entry.piece());
-        double away = rim.distance(p, entry.piece(), s);
-        if (away <= distance) {
-          hits.add(new Hit(entry.rim(), s, away));
+        for (int k = entry.from(); k < entry.to(); k++) {
+          collect(entry.rim(), k, p, distance, hits);
         }
       }
+    }
+  }
+
+  private void collect(int index, int piece, Vector3 p, double distance, List<Hit> hits) {
+    Rim rim = rims.get(index);
+    double chord = rim.point(piece + 1).minus(rim.point(piece)).norm();
+    if (rim.point(piece).minus(p).norm() > (1 + SAG) * chord + distance) {
+      return;
+    }
+    double s = rim.nearest(p, piece);
+    double away = rim.distance(p, piece, s);
+    if (away <= distance) {
+      hits.add(new Hit(index, s, away));
     }
   }
 

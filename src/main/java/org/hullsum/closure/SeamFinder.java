@@ -1,7 +1,7 @@
 package org.hullsum.closure;
 
 import java.util.ArrayList;
-import java.util.Comparator;
+import java.util.Collections;
 import java.util.List;
 import java.util.Map;
 import java.util.TreeMap;
@@ -198,7 +198,7 @@ public final class SeamFinder {
         }
       }
     }
-    cuts.forEach(c -> c.sort(Comparator.naturalOrder()));
+    cuts.forEach(Collections::sort);
     return cuts;
   }
 

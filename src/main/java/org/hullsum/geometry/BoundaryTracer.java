@@ -22,7 +22,7 @@ final class BoundaryTracer {
       int index, Chart chart, Optional<Expression> condition, Map<String, Double> parameters) {
     this.chart = chart;
     this.region = new KeptRegion(condition, parameters);
-    this.refiner = new CurveRefiner(index, ChartEvaluator.of(chart, parameters), region);
+    this.refiner = new CurveRefiner(index, ChartPositions.of(chart, parameters), region);
     if (region.isTrimmed()) {
       TrimContour contour = new TrimContour(region);
       this.curves = contour.segments();

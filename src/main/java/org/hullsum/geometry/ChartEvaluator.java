@@ -28,24 +28,20 @@ public final class ChartEvaluator {
   /** Number of rows. */
   public static final int ROWS = 12;
 
-  private final BatchEvaluator positions;
   private final BatchEvaluator all;
 
   /** Scratch memory of one thread. */
   public static final class Workspace {
-    private final BatchEvaluator.Workspace positions;
     private final BatchEvaluator.Workspace all;
     private final double[][] point = new double[2][1];
     private final double[][] values = new double[ROWS][1];
 
     private Workspace(ChartEvaluator owner) {
-      positions = owner.positions.workspace();
       all = owner.all.workspace();
     }
   }
 
-  private ChartEvaluator(BatchEvaluator positions, BatchEvaluator all) {
-    this.positions = positions;
+  private ChartEvaluator(BatchEvaluator all) {
     this.all = all;
   }
 
@@ -62,7 +58,6 @@ public final class ChartEvaluator {
     VectorExpression rv = chart.tangentV();
     VectorExpression area = ru.cross(rv).simplified();
     return new ChartEvaluator(
-        BatchEvaluator.compile(variables, parameters, List.of(r.x(), r.y(), r.z())),
         BatchEvaluator.compile(
             variables,
             parameters,
@@ -73,17 +68,6 @@ public final class ChartEvaluator {
 
   public Workspace workspace() {
     return new Workspace(this);
-  }
-
-  /**
-   * Positions only.
-   *
-   * @param inputs rows u and v
-   * @param count number of points
-   * @param outputs rows x, y, z, written for the first {@code count} points
-   */
-  public void positions(double[][] inputs, int count, double[][] outputs, Workspace workspace) {
-    positions.evaluate(inputs, count, outputs, workspace.positions);
   }
 
   /**

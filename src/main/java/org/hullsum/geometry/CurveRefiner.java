@@ -18,8 +18,7 @@ final class CurveRefiner {
   };
 
   private final int chart;
-  private final ChartEvaluator evaluator;
-  private final ChartEvaluator.Workspace workspace;
+  private final ChartPositions positions;
   private final KeptRegion region;
 
   private final List<Node> nodes = new ArrayList<>();
@@ -39,10 +38,9 @@ final class CurveRefiner {
     }
   }
 
-  CurveRefiner(int chart, ChartEvaluator evaluator, KeptRegion region) {
+  CurveRefiner(int chart, ChartPositions positions, KeptRegion region) {
     this.chart = chart;
-    this.evaluator = evaluator;
-    this.workspace = evaluator.workspace();
+    this.positions = positions;
     this.region = region;
   }
 
@@ -82,10 +80,12 @@ final class CurveRefiner {
 
   /** The position; a little inside the square where the formula is undefined on a side. */
   private Vector3 position(double u, double v) {
-    Vector3 position = evaluator.at(u, v, workspace).position();
-    return position.isFinite()
-        ? position
-        : evaluator.at(KeptRegion.inset(u), KeptRegion.inset(v), workspace).position();
+    Vector3 position = positions.at(u, v);
+    return position.isFinite() ? position : inset(u, v);
+  }
+
+  private Vector3 inset(double u, double v) {
+    return positions.at(KeptRegion.inset(u), KeptRegion.inset(v));
   }
 
   /** Inserts the middles of segments that are too coarse; their halves. */
@@ -98,6 +98,7 @@ final class CurveRefiner {
       middle[1][i] = 0.5 * (start.v + end.v);
     }
     boolean[] found = onTrim ? onCurve(open, middle) : all(open.size());
+    Vector3[] there = positions.at(middle, open.size());
     List<Integer> coarse = new ArrayList<>();
     for (int i = 0; i < open.size(); i++) {
       if (!found[i]) {
@@ -105,7 +106,7 @@ final class CurveRefiner {
       }
       Node start = nodes.get(open.get(i));
       Node end = nodes.get(start.next);
-      Vector3 position = position(middle[0][i], middle[1][i]);
+      Vector3 position = there[i].isFinite() ? there[i] : inset(middle[0][i], middle[1][i]);
       if (distance(position, start.position, end.position) > tolerance) {
         nodes.add(new Node(middle[0][i], middle[1][i], position, start.next));
         start.next = nodes.size() - 1;

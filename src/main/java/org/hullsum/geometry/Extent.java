@@ -18,11 +18,7 @@ public final class Extent {
     Optional<Vector3> first = Optional.empty();
     double largest = 0;
     for (Chart chart : surface.charts()) {
-      ChartEvaluator evaluator = ChartEvaluator.of(chart, parameters);
-      double[][] r = new double[3][count];
-      evaluator.positions(at, count, r, evaluator.workspace());
-      for (int i = 0; i < count; i++) {
-        Vector3 position = new Vector3(r[0][i], r[1][i], r[2][i]);
+      for (Vector3 position : ChartPositions.of(chart, parameters).at(at, count)) {
         if (position.isFinite()) {
           Vector3 origin = first.orElse(position);
           first = Optional.of(origin);
