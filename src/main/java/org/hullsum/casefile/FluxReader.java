@@ -203,7 +203,7 @@ final class FluxReader {
       return Optional.empty();
     }
     boolean fixed = map.get("fixed").flatMap(v -> values.flag(v, "`fixed`")).orElse(false);
-    Need need = new Need("`metered`", Map.of(), rate, Optional.empty());
+    Need need = new Need("`metered`", Map.of(), rate, rate.flatMap(r -> rates.unit()));
     Optional<Formula> figure = measured.measured(value, patch + " metered", need);
     if (figure.isEmpty()) {
       correlations.refused(patch);

@@ -45,7 +45,7 @@ final class MapReader {
       problems.add(
           ProblemKind.NOT_SUPPORTED,
           entry.key().place(),
-          "`" + key + "` in " + section.title() + " is not supported yet");
+          "`" + key + "` in " + section.title() + " is not supported yet" + section.wayRound(key));
       return;
     }
     problems.add(

@@ -1,6 +1,8 @@
 package org.hullsum.casefile;
 
 import java.util.Optional;
+import java.util.regex.Matcher;
+import java.util.regex.Pattern;
 import org.hullsum.expression.Expression;
 import org.hullsum.model.Input;
 import org.hullsum.problem.ProblemKind;
@@ -9,6 +11,7 @@ import org.hullsum.units.Dimension;
 import org.hullsum.units.MeasuredQuantity;
 import org.hullsum.units.MeasuredQuantityParser;
 import org.hullsum.units.Noted;
+import org.hullsum.units.Unit;
 import org.hullsum.units.WorkingUnits;
 
 /**
@@ -25,6 +28,10 @@ final class MeasuredReader {
     this.scope = formulas.scope();
     this.parser = MeasuredQuantityParser.of(scope.usualMeaning(), scope.working());
   }
+
+  /** A number, alone or before its uncertainty. */
+  private static final Pattern BARE =
+      Pattern.compile("\\s*([-+]?(?:\\d+\\.?\\d*|\\.\\d+)(?:[eE][-+]?\\d+)?)\\s*(?:$|±|\\+/-)");
 
   /** Whether a text is a value with an uncertainty. */
   static boolean hasUncertainty(String text) {
@@ -63,11 +70,51 @@ final class MeasuredReader {
     if (text.isEmpty()) {
       return Optional.empty();
     }
+    if (isAmbiguous(text.get(), need)) {
+      return Optional.empty();
+    }
     if (hasUncertainty(text.get().text())) {
       return figure(text.get()).flatMap(figure -> input(text.get(), figure, name, need));
     }
     Optional<Formula> formula = formulas.formula(value, need).filter(f -> isFinite(f, text.get()));
     return formula.map(f -> Figures.isFigure(f.expression()) ? exact(text.get(), f, name) : f);
+  }
+
+  /**
+   * Refuses a bare number where the unit that the case states for rates is not the working one: it
+   * can be meant in either.
+   */
+  private boolean isAmbiguous(YamlText text, Need need) {
+    Matcher bare = BARE.matcher(text.text());
+    if (need.stated().isEmpty() || !bare.lookingAt() || Double.parseDouble(bare.group(1)) == 0) {
+      return false;
+    }
+    Unit unit = need.stated().get();
+    double factor = unit.scale() / scope.working().scale(unit.dimension());
+    if (BareNumbers.sameScale(factor)) {
+      return false;
+    }
+    String number = bare.group(1);
+    scope
+        .problems()
+        .add(
+            ProblemKind.DIMENSION,
+            text.place(),
+            need.what()
+                + " is "
+                + number
+                + " without a unit: is it "
+                + number
+                + " "
+                + unit.code()
+                + ", or "
+                + number
+                + " in working units (that is "
+                + Double.parseDouble(number) / factor
+                + " "
+                + unit.code()
+                + ")? Write its unit after it");
+    return true;
   }
 
   /** Where the parameters are known; a formula of time has no one value. */

@@ -4,18 +4,21 @@ import java.util.Map;
 import java.util.Optional;
 import org.hullsum.model.ConservedQuantity;
 import org.hullsum.units.Dimension;
+import org.hullsum.units.Unit;
 
 /**
  * What the rates of a case measure.
  *
  * @param name of the conserved quantity, for messages
  * @param dimension of a rate; empty with {@code units: none} and where {@code quantity} was refused
+ * @param unit in which the case states rates; empty likewise
  */
-record Rates(String name, Optional<Dimension> dimension) {
+record Rates(String name, Optional<Dimension> dimension, Optional<Unit> unit) {
   static Rates of(Optional<ConservedQuantity> quantity, boolean units) {
     return new Rates(
         quantity.map(ConservedQuantity::name).orElse("quantity"),
-        quantity.filter(q -> units).map(q -> q.rateUnit().dimension()));
+        quantity.filter(q -> units).map(q -> q.rateUnit().dimension()),
+        quantity.filter(q -> units).map(ConservedQuantity::rateUnit));
   }
 
   /** Per area: what a flux density measures. */
@@ -34,6 +37,6 @@ record Rates(String name, Optional<Dimension> dimension) {
   }
 
   Need need(String what) {
-    return new Need(what, Map.of(), dimension, Optional.empty());
+    return new Need(what, Map.of(), dimension, unit);
   }
 }

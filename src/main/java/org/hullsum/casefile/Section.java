@@ -111,4 +111,12 @@ enum Section {
   static Set<String> allKeys() {
     return Arrays.stream(values()).flatMap(s -> s.keys().stream()).collect(Collectors.toSet());
   }
+
+  /** What to write instead of a key that is not read yet; empty where there is nothing. */
+  String wayRound(String key) {
+    return key.equals("level")
+        ? "; write the rate itself, such as `accumulation: area*(level2 - level1)/period` with these"
+            + " as parameters"
+        : "";
+  }
 }

@@ -181,7 +181,9 @@ class ProgramTest {
       strings = {
         "",
         "audit",
-        "orient x.yaml",
+        "orient",
+        "orient x.yaml y.yaml",
+        "orient x.yaml --quiet",
         "reconcile x.yaml",
         "desk x.yaml",
         "audit x.yaml --html f",
