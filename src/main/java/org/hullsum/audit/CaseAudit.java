@@ -16,6 +16,7 @@ import org.hullsum.model.Envelope;
 import org.hullsum.model.Patch;
 import org.hullsum.model.Tolerances;
 import org.hullsum.model.Volume;
+import org.hullsum.problem.Finding;
 import org.hullsum.problem.Place;
 
 /**
@@ -62,7 +63,11 @@ final class CaseAudit {
     Map<String, GapIntegration.GapAudit> gaps = integrateGaps(surfaces);
     CaseFindings findings = new CaseFindings(scales);
     onPatches.forEach(found -> findings.addAll(found.findings(scales)));
-    inVolumes.forEach(found -> findings.addAll(found.findings(scales)));
+    for (int v = 0; v < inVolumes.size(); v++) {
+      boolean stated = StatedSource.in(audited.volumes().get(v));
+      List<Finding> found = inVolumes.get(v).findings(scales);
+      findings.addAll(stated ? found.stream().map(StatedSource::weighed).toList() : found);
+    }
     gather(findings, patches, surfaces, facings, interiors, rates, drawn);
     Explainer.Explanations explained = explain(patches, surfaces, facings, interiors, drawn, gaps);
     List<BalanceResult> balances =

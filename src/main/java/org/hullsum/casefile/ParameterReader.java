@@ -82,6 +82,15 @@ final class ParameterReader {
                 "the case has no parameter `" + name + "`" + Nearest.hint(name, places.keySet()));
             return;
           }
+          Optional<YamlText> before = Optional.ofNullable(stated.get(name));
+          scope.note(
+              "`"
+                  + name
+                  + "` is "
+                  + YamlText.quoted(value)
+                  + " by --set"
+                  + before.map(t -> ", in place of " + t.shown() + " of the file").orElse("")
+                  + ".");
           SourceText source = new SourceText(origin, value);
           stated.put(
               name, new YamlText(value, YamlText.Style.PLAIN, false, 0, value.length(), source));

@@ -125,11 +125,12 @@ final class AuditRun {
     }
   }
 
-  private static AuditResult.Provenance provenance(Instant now, Set<Case.SourceFile> sources) {
+  private AuditResult.Provenance provenance(Instant now, Set<Case.SourceFile> sources) {
     return new AuditResult.Provenance(
         ProgramVersion.text(),
         "formulas over blocks of points, Java " + Runtime.version().feature(),
         now.toString(),
+        request.parameters(),
         List.copyOf(sources));
   }
 

@@ -2,6 +2,7 @@ package org.hullsum.report;
 
 import java.io.IOException;
 import java.io.OutputStream;
+import java.util.Map;
 import org.hullsum.audit.AuditResult;
 import org.hullsum.audit.CaseResult;
 import org.hullsum.audit.Verdict;
@@ -112,6 +113,11 @@ public final class JsonReport {
     json.text("program", provenance.program());
     json.text("evaluator", provenance.evaluator());
     json.text("at", provenance.at());
+    json.beginObject("settings");
+    for (Map.Entry<String, String> setting : provenance.settings().entrySet()) {
+      json.text(setting.getKey(), setting.getValue());
+    }
+    json.endObject();
     json.beginArray("inputs");
     for (Case.SourceFile input : provenance.inputs()) {
       json.beginObject();

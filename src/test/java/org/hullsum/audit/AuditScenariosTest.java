@@ -436,4 +436,33 @@ class AuditScenariosTest {
     assertEquals(Verdict.BALANCED, only(result).verdict());
     assertTrue(only(result).lines().get(0).standardUncertainty() > 0);
   }
+
+  @Test
+  void poleOfAFieldAtAStatedSourceIsAWarningAndTheCheckStands() {
+    CaseResult result =
+        audit(
+            """
+            format: hullsum-case/1
+            quantity: energy
+            fields:
+              heat:
+                coordinates: spherical
+                vector: ["25 W/(pi*r^2)", "0", "0"]
+                unit: W/m2
+            volumes:
+              ball: {interior: {generation: 100 W}}
+            patches:
+              skin:
+                leaves: ball
+                surface: {sphere: {centre: [0.1, 0, 0], radius: 1}}
+                flux: {field: heat}
+            """);
+    assertEquals(Verdict.BALANCED, only(result).verdict());
+    Finding pole =
+        result.findings().stream()
+            .filter(f -> f.code() == FindingCode.FIELD_SINGULAR)
+            .findFirst()
+            .orElseThrow();
+    assertEquals(Severity.WARNING, pole.severity());
+  }
 }

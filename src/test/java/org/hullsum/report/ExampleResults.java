@@ -31,6 +31,7 @@ final class ExampleResults {
             "hullsum 0.1.0",
             "closures over blocks",
             "2026-03-01T02:03:04Z",
+            Map.of("NAME", "5 m"),
             List.of(new Case.SourceFile("basin.yaml", "ab12"))));
   }
 

@@ -64,7 +64,9 @@ class JsonReportTest {
             "correctedCoverage",
             "explanations"),
         keys(document.get("cases").get(0)));
-    assertEquals(List.of("program", "evaluator", "at", "inputs"), keys(document.get("provenance")));
+    assertEquals(
+        List.of("program", "evaluator", "at", "settings", "inputs"),
+        keys(document.get("provenance")));
     assertEquals(List.of("file", "sha256"), keys(document.at("/provenance/inputs/0")));
   }
 
