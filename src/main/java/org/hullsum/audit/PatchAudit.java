@@ -103,6 +103,13 @@ record PatchAudit(
         estimate.ifPresent(following::add);
       }
     }
+    if (missing.isEmpty() && !hasArea() && surface.isPresent()) {
+      // Nothing could be integrated: what follows the normal is not zero but not known.
+      missing =
+          patch.fluxes().stream().anyMatch(f -> NormalFollowing.of(f.statement()))
+              ? degenerate
+              : Optional.empty();
+    }
     boolean whole = !unknown && missing.isEmpty();
     return new PatchRate(
         name(),

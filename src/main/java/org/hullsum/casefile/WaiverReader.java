@@ -38,8 +38,8 @@ final class WaiverReader {
   private Optional<Waiver> waiver(MapReader map) {
     Optional<FindingCode> code = map.require("finding").flatMap(this::code);
     Optional<String> where = map.require("where").flatMap(this::where);
-    Optional<String> because = map.require("because").flatMap(v -> values.freeText(v, "`because`"));
-    Optional<String> by = map.require("by").flatMap(v -> values.freeText(v, "`by`"));
+    Optional<String> because = map.require("because").flatMap(v -> said(v, "`because`"));
+    Optional<String> by = map.require("by").flatMap(v -> said(v, "`by`"));
     Optional<LocalDate> until = map.get("until").flatMap(this::date);
     return Together.of(
         code,
@@ -93,5 +93,15 @@ final class WaiverReader {
               "`until` is a date such as 2027-03-31; here is " + value.described());
       return Optional.empty();
     }
+  }
+
+  /** A text with something in it: a waiver is somebody's word. */
+  private Optional<String> said(YamlValue value, String what) {
+    Optional<String> text = values.freeText(value, what);
+    if (text.filter(String::isBlank).isPresent()) {
+      values.problems().add(ProblemKind.WRONG_VALUE, value.place(), what + " is empty; say it");
+      return Optional.empty();
+    }
+    return text;
   }
 }

@@ -1,5 +1,6 @@
 package org.hullsum.cli;
 
+import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.InvalidPathException;
 import java.nio.file.Path;
@@ -107,6 +108,9 @@ final class AuditOptionsReader {
     if (json.isPresent() && json.equals(junit)) {
       throw fault("--json and --junit both write to " + json.get() + "; give them two places");
     }
+    for (Optional<String> document : List.of(json, junit)) {
+      document.ifPresent(this::refuseCase);
+    }
     return new AuditRequest(
         usual.cases(),
         json,
@@ -117,6 +121,22 @@ final class AuditOptionsReader {
         digits(),
         !parsed.hasMatchedOption("--no-progress"),
         parsed.hasMatchedOption("--quiet"));
+  }
+
+  /** A document is not written over a case that is to be read. */
+  private void refuseCase(String document) {
+    if (usual.cases().stream().anyMatch(name -> isSame(name, document))) {
+      throw fault(document + " is a case of this audit; write the document elsewhere");
+    }
+  }
+
+  /** Whether two names are of one file; what can't be read is told where it is read. */
+  private static boolean isSame(String name, String document) {
+    try {
+      return Files.exists(Path.of(document)) && Files.isSameFile(Path.of(name), Path.of(document));
+    } catch (IOException | InvalidPathException e) {
+      return false;
+    }
   }
 
   private Map<String, String> parameters() {

@@ -260,8 +260,11 @@ public final class FacingFinder {
       Crossings found = probe(other).along(point.position(), direction);
       double near = Math.max(probe(patch).near(), probe(other).near());
       int here = PatchProbe.count(found, near);
-      if (!found.reliable() || (other == patch && here != 1)) {
+      if (!found.reliable() || (other == patch && here == 0)) {
         return;
+      }
+      if (other == patch && here > 1) {
+        coincident.add(other);
       }
       if (other != patch && here > 0) {
         coincident.add(other);
@@ -274,6 +277,9 @@ public final class FacingFinder {
       }
     }
     for (int other : coincident) {
+      if (other == patch) {
+        continue;
+      }
       overlaps.putIfAbsent(
           List.of(Math.min(patch, other), Math.max(patch, other)), point.position());
     }

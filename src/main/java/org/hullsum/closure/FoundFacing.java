@@ -83,6 +83,10 @@ public record FoundFacing(
     if (sign == 0 || (side != Side.UNDETERMINED && side.sign() == sign)) {
       return this;
     }
+    if (side == Side.UNDETERMINED && reason.filter(Reason.NO_RELIABLE_LINE::equals).isEmpty()) {
+      // What lines show to be at odds no seam can mend.
+      return this;
+    }
     if (side == Side.UNDETERMINED) {
       return new FoundFacing(
           patch, sign > 0 ? Side.OUT : Side.IN, Optional.empty(), Optional.empty(), lines);

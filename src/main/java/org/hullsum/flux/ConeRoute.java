@@ -35,6 +35,9 @@ final class ConeRoute {
   /** Rounding relative to the sum of |g| over all cones: nothing below it can be asked for. */
   private static final double ROUNDING = 1e-14;
 
+  /** How many times the error asked for the bound, inner integrals included, may be. */
+  private static final double FAR_OFF = 10;
+
   /** Part of the allowed error that the inner integrals may take. */
   private static final double INNER_SHARE = 0.1;
 
@@ -94,7 +97,10 @@ final class ConeRoute {
     if (totals.isFinite() && totals.magnitudeError() > loose) {
       measureMagnitude(totals, limit);
     }
-    return totals.outcome();
+    double asked = Math.max(relative * totals.magnitude(), enough);
+    double known = Math.max(FAR_OFF * asked, FAR_OFF * ROUNDING * coarse.coneMagnitude);
+    boolean farOff = totals.isFinite() && totals.errorBound(0) > known;
+    return farOff ? totals.outcome().doubted(totals.errorBound(0)) : totals.outcome();
   }
 
   /** All cones to one accuracy. */

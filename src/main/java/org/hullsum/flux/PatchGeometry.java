@@ -1,6 +1,7 @@
 package org.hullsum.flux;
 
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.List;
 import java.util.Map;
 import java.util.Objects;
@@ -88,6 +89,9 @@ public record PatchGeometry(
     // Far from the origin positions carry no more digits than this.
     double rounding = ROUNDING * (1 + reference.norm() / size);
     double absolute = Math.max(Math.pow(10, -digits), rounding) * coarseArea / (2 * charts.size());
+    if (!Double.isFinite(absolute)) {
+      return notFinite(box);
+    }
     Accuracy accuracy =
         new Accuracy(
             0,
@@ -111,6 +115,23 @@ public record PatchGeometry(
       evaluations += parts[0].evaluations();
     }
     return gathered(sums, errors, reference, size, box, evaluations, status);
+  }
+
+  /** Of a surface whose formulas, or their products, leave the range of numbers. */
+  private static PatchGeometry notFinite(Box3 box) {
+    Vector3 none = new Vector3(Double.NaN, Double.NaN, Double.NaN);
+    return new PatchGeometry(
+        Double.NaN,
+        Double.POSITIVE_INFINITY,
+        none,
+        Double.POSITIVE_INFINITY,
+        none,
+        Collections.nCopies(9, Double.NaN),
+        Double.POSITIVE_INFINITY,
+        none,
+        box,
+        0,
+        Integral.Status.NOT_FINITE);
   }
 
   /** Area element, N, and the moments in units of the patch's size. */

@@ -465,4 +465,34 @@ class AuditScenariosTest {
             .orElseThrow();
     assertEquals(Severity.WARNING, pole.severity());
   }
+
+  private static CaseResult wrapped(String surface) {
+    return audit(
+        """
+        format: hullsum-case/1
+        units: none
+        fields: {flow: {vector: [x, y, z]}}
+        volumes: {v: {interior: {divergence-of: flow}}}
+        patches:
+          skin: {leaves: v, surface: SURFACE, flux: {field: flow}}
+        """
+            .replace("SURFACE", surface));
+  }
+
+  @Test
+  void sphereThatIsWrappedTwiceIsNotCalledClosed() {
+    CaseResult result =
+        wrapped(
+            "{parametric: {point: [sin(u)*cos(v), sin(u)*sin(v), cos(u)], u: [0, pi],"
+                + " v: [0, 4*pi]}}");
+    assertEquals(Optional.empty(), result.surfaces().get(0).closed());
+    assertEquals(Verdict.UNDECIDED, only(result).verdict());
+  }
+
+  @Test
+  void surfaceWhosePointsLeaveTheRangeOfNumbersIsDegenerateAndNothingIsDecided() {
+    CaseResult result = wrapped("{sphere: {centre: [1e308, 0, 0], radius: 1e308}}");
+    assertTrue(result.findings().stream().anyMatch(f -> f.code() == FindingCode.PATCH_DEGENERATE));
+    assertEquals(Verdict.UNDECIDED, only(result).verdict());
+  }
 }

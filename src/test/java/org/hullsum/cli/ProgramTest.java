@@ -285,4 +285,13 @@ class ProgramTest {
     assertEquals(70, run.status());
     assertTrue(run.err().startsWith("@balanced.yaml: "), run.err());
   }
+
+  @Test
+  void aDocumentIsNotWrittenOverACaseOfTheAudit(@TempDir Path folder) throws IOException {
+    Path file = Files.writeString(folder.resolve("case.yaml"), "format: hullsum-case/1\n");
+    ProgramRun run = run("audit", "--json", folder + "/./case.yaml", file.toString());
+    assertEquals(64, run.status());
+    assertTrue(run.err().contains("is a case of this audit"), run.err());
+    assertEquals("format: hullsum-case/1\n", Files.readString(file));
+  }
 }
