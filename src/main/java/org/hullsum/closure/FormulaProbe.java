@@ -67,8 +67,10 @@ final class FormulaProbe implements PatchProbe {
       searched = true;
       // The trim leaves little of the charts: look for it with more care.
       for (SurfaceSample sample : SurfaceSamples.of(surface, parameters, count)) {
-        Vector3 normal = sample.at().areaVector().unit();
-        points.add(new SamplePoint(sample.at().position(), normal));
+        Vector3 area = sample.at().areaVector();
+        if (area.isFinite() && sample.at().position().isFinite()) {
+          points.add(new SamplePoint(sample.at().position(), area.unit()));
+        }
       }
     }
     return points.subList(0, Math.min(count, points.size()));
@@ -80,7 +82,7 @@ final class FormulaProbe implements PatchProbe {
     double v = MARGIN + (1 - 2 * MARGIN) * ((0.57 + (k + 1) * STEP_V) % 1);
     ChartPoint at = chart.at(u, v, chart.workspace());
     double area = at.areaVector().norm();
-    if (!(area > 0) || !at.position().isFinite()) {
+    if (!(area > 0) || !at.position().isFinite() || !at.areaVector().isFinite()) {
       return;
     }
     Vector3 normal = at.areaVector().unit();
