@@ -243,7 +243,7 @@ final class FluxReader {
     if (ends.isEmpty()) {
       return Optional.empty();
     }
-    Need need = rates.need("a bound of `within`");
+    Need need = new Need("a bound of `within`", Map.of(), rates.dimension(), Optional.empty());
     OptionalDouble low = formulas.number(ends.get().get(0), need);
     OptionalDouble high = formulas.number(ends.get().get(1), need);
     if (low.isEmpty() || high.isEmpty()) {

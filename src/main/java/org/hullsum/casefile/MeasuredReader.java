@@ -29,9 +29,9 @@ final class MeasuredReader {
     this.parser = MeasuredQuantityParser.of(scope.usualMeaning(), scope.working());
   }
 
-  /** A number, alone or before its uncertainty. */
+  /** A number alone. */
   private static final Pattern BARE =
-      Pattern.compile("\\s*([-+]?(?:\\d+\\.?\\d*|\\.\\d+)(?:[eE][-+]?\\d+)?)\\s*(?:$|±|\\+/-)");
+      Pattern.compile("\\s*([-+]?(?:\\d+\\.?\\d*|\\.\\d+)(?:[eE][-+]?\\d+)?)\\s*");
 
   /** Whether a text is a value with an uncertainty. */
   static boolean hasUncertainty(String text) {
@@ -70,7 +70,8 @@ final class MeasuredReader {
     if (text.isEmpty()) {
       return Optional.empty();
     }
-    if (isAmbiguous(text.get(), need)) {
+    Matcher bare = BARE.matcher(text.get().text());
+    if (bare.matches() && isAmbiguous(text.get(), bare.group(1), need)) {
       return Optional.empty();
     }
     if (hasUncertainty(text.get().text())) {
@@ -84,9 +85,8 @@ final class MeasuredReader {
    * Refuses a bare number where the unit that the case states for rates is not the working one: it
    * can be meant in either.
    */
-  private boolean isAmbiguous(YamlText text, Need need) {
-    Matcher bare = BARE.matcher(text.text());
-    if (need.stated().isEmpty() || !bare.lookingAt() || Double.parseDouble(bare.group(1)) == 0) {
+  private boolean isAmbiguous(YamlText text, String number, Need need) {
+    if (need.stated().isEmpty() || Double.parseDouble(number) == 0) {
       return false;
     }
     Unit unit = need.stated().get();
@@ -94,7 +94,6 @@ final class MeasuredReader {
     if (BareNumbers.sameScale(factor)) {
       return false;
     }
-    String number = bare.group(1);
     scope
         .problems()
         .add(
@@ -139,6 +138,10 @@ final class MeasuredReader {
 
   private Optional<Formula> input(YamlText text, MeasuredQuantity figure, String name, Need need) {
     WorkingUnits working = scope.working();
+    if (figure.quantity().bare()
+        && isAmbiguous(text, Double.toString(figure.quantity().in(working)), need)) {
+      return Optional.empty();
+    }
     Optional<Dimension> dimension =
         figure.quantity().bare() || working.none()
             ? Optional.empty()
