@@ -39,7 +39,7 @@ final class CaseBuilder {
       Path folder,
       ReadOptions options,
       ProblemAccumulator problems) {
-    this.files = new DataFiles(folder, options.allowedOutside(), problems);
+    this.files = new DataFiles(folder, options, problems);
     this.content = content;
     this.options = options;
     this.problems = problems;

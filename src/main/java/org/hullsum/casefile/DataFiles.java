@@ -15,16 +15,18 @@ import org.hullsum.problem.ProblemKind;
 final class DataFiles {
   private final Path folder;
   private final List<Path> allowed;
+  private final int threads;
   private final ProblemAccumulator problems;
   private final Map<String, FileDigest> used = new LinkedHashMap<>();
 
   /**
    * @param folder of the case file
-   * @param allowed folders outside it from which files may be read
+   * @param options say from which folders outside it files may be read
    */
-  DataFiles(Path folder, List<Path> allowed, ProblemAccumulator problems) {
+  DataFiles(Path folder, ReadOptions options, ProblemAccumulator problems) {
     this.folder = folder;
-    this.allowed = List.copyOf(allowed);
+    this.allowed = options.allowedOutside();
+    this.threads = options.threads();
     this.problems = problems;
   }
 
@@ -67,6 +69,11 @@ final class DataFiles {
     return Files.isReadable(file)
         ? Optional.empty()
         : Optional.of("permission to read " + name.shown() + " is missing");
+  }
+
+  /** The threads that may be used to read them. */
+  int threads() {
+    return threads;
   }
 
   /** The files that were found, each once. */

@@ -37,7 +37,10 @@ final class MeshSurfaceReader {
     }
     return mesh(file.get(), name.get(), scale.getAsDouble())
         .flatMap(mesh -> part.isPresent() ? part(mesh, part.get()) : Optional.of(mesh))
-        .map(mesh -> new PatchSurface.Triangles(MeshTopology.of(mesh), TriangleTree.of(mesh)));
+        .map(
+            mesh ->
+                new PatchSurface.Triangles(
+                    MeshTopology.of(mesh, files.threads()), TriangleTree.of(mesh)));
   }
 
   /** From the file's unit of length to the working one, times {@code scale}. */
@@ -95,7 +98,7 @@ final class MeshSurfaceReader {
 
   private Optional<TriangleMesh> mesh(Path file, YamlText name, double scale) {
     try {
-      TriangleMeshBuilder builder = MeshFile.read(file);
+      TriangleMeshBuilder builder = MeshFile.read(file, files.threads());
       return Optional.of(builder.build(scale));
     } catch (MeshFault fault) {
       problems.add(

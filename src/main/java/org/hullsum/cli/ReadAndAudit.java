@@ -23,7 +23,8 @@ final class ReadAndAudit implements CasePipeline {
       read =
           CaseReader.read(
               Path.of(file),
-              new ReadOptions(file, settings.parameters(), settings.allowedFolders()));
+              new ReadOptions(
+                  file, settings.parameters(), settings.allowedFolders(), settings.threads()));
     } catch (InvalidPathException e) {
       return unreadable(
           file,

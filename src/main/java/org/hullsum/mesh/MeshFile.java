@@ -5,6 +5,8 @@ import java.nio.channels.ReadableByteChannel;
 import java.nio.channels.SeekableByteChannel;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.Optional;
+import java.util.OptionalInt;
 
 /**
  * Reads a file of any format that is known, packed with gzip or not: by what it begins with, and
@@ -20,12 +22,33 @@ public final class MeshFile {
   /**
    * Reads a file.
    *
+   * @param threads that may be used; what is read does not depend on it
    * @return what was gathered, to be scaled and built
    */
-  public static TriangleMeshBuilder read(Path path) throws IOException, MeshFault {
+  public static TriangleMeshBuilder read(Path path, int threads) throws IOException, MeshFault {
+    OptionalInt records = records(path);
+    if (records.isPresent()) {
+      return StlRecords.read(path, records.getAsInt(), threads);
+    }
     TriangleMeshBuilder builder = new TriangleMeshBuilder();
     read(path, StlReader::read, builder);
     return builder;
+  }
+
+  /** The number of triangles where the file is nothing but the records of binary STL. */
+  private static OptionalInt records(Path path) throws IOException {
+    try (SeekableByteChannel file = Files.newByteChannel(path)) {
+      byte[] head = new PeekedChannel(file, MeshFormat.HEAD).head();
+      String name = String.valueOf(path.getFileName());
+      return !isPacked(head)
+              && MeshFormat.of(head, file.size(), name).equals(Optional.of(MeshFormat.STL))
+          ? StlRecords.count(head, file.size())
+          : OptionalInt.empty();
+    }
+  }
+
+  private static boolean isPacked(byte[] head) {
+    return head.length >= 2 && (head[0] & 0xff) == GZIP_MAGIC_1 && (head[1] & 0xff) == GZIP_MAGIC_2;
   }
 
   /**
@@ -53,9 +76,7 @@ public final class MeshFile {
     try {
       PeekedChannel file = new PeekedChannel(channel, MeshFormat.HEAD);
       byte[] head = file.head();
-      boolean packed =
-          head.length >= 2 && (head[0] & 0xff) == GZIP_MAGIC_1 && (head[1] & 0xff) == GZIP_MAGIC_2;
-      if (!packed) {
+      if (!isPacked(head)) {
         return readPlain(file, size, name, stl, sink);
       }
       try (PeekedChannel plain = new PeekedChannel(new GunzipChannel(file), MeshFormat.HEAD)) {

@@ -23,7 +23,7 @@ public final class MeshTopology {
   private final int degenerate;
   private final int duplicates;
 
-  private MeshTopology(TriangleMesh mesh) {
+  private MeshTopology(TriangleMesh mesh, int threads) {
     this.mesh = mesh;
     BitSet leftOut = new BitSet();
     for (int t = 0; t < mesh.triangleCount(); t++) {
@@ -32,17 +32,26 @@ public final class MeshTopology {
       }
     }
     this.degenerate = leftOut.cardinality();
-    EdgePairing first = EdgePairing.of(mesh, leftOut);
+    EdgePairing first = EdgePairing.of(mesh, leftOut, threads);
     this.duplicates = leaveOutDuplicates(first, leftOut);
-    this.pairing = duplicates > 0 ? EdgePairing.of(mesh, leftOut) : first;
+    this.pairing = duplicates > 0 ? EdgePairing.of(mesh, leftOut, threads) : first;
     this.turned = new BitSet();
     this.shells = findShells(leftOut);
     this.loops = new MeshLoops(mesh, pairing).loops();
   }
 
-  /** Looks at a mesh. */
+  /** Looks at a mesh, on one thread. */
   public static MeshTopology of(TriangleMesh mesh) {
-    return new MeshTopology(mesh);
+    return of(mesh, 1);
+  }
+
+  /**
+   * Looks at a mesh.
+   *
+   * @param threads that may be used; the result does not depend on it
+   */
+  public static MeshTopology of(TriangleMesh mesh, int threads) {
+    return new MeshTopology(mesh, threads);
   }
 
   private boolean isDegenerate(int t) {

@@ -88,7 +88,7 @@ final class StlReader {
     float y = real(from, at + Float.BYTES);
     float z = real(from, at + 2 * Float.BYTES);
     if (!Float.isFinite(x) || !Float.isFinite(y) || !Float.isFinite(z)) {
-      throw bytes.faultAt(offset, "the corner (" + x + ", " + y + ", " + z + ") is not finite");
+      throw StlRecords.notFinite(offset, x, y, z);
     }
     bytes.advance(3 * Float.BYTES);
     return sink.vertex(x, y, z);

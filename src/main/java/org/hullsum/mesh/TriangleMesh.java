@@ -13,6 +13,7 @@ import org.hullsum.numeric.Vector3;
  */
 public final class TriangleMesh {
   private final double[] coordinates;
+  private final int vertices;
   private final int[] corners;
   private final int[] runStarts;
   private final int[] runParts;
@@ -21,15 +22,23 @@ public final class TriangleMesh {
   /**
    * Takes over the arrays, which the caller must not touch again.
    *
-   * @param coordinates x, y, z of each vertex in turn
+   * @param coordinates x, y, z of each vertex in turn; what stands behind the last counts for
+   *     nothing
+   * @param vertices how many
    * @param corners three vertices of each triangle in turn
    * @param runStarts first triangle of each run of triangles of one part, ascending, the first 0
    * @param runParts the part of each run
    * @param parts the names of the parts, each once
    */
   TriangleMesh(
-      double[] coordinates, int[] corners, int[] runStarts, int[] runParts, List<String> parts) {
+      double[] coordinates,
+      int vertices,
+      int[] corners,
+      int[] runStarts,
+      int[] runParts,
+      List<String> parts) {
     this.coordinates = coordinates;
+    this.vertices = vertices;
     this.corners = corners;
     this.runStarts = runStarts;
     this.runParts = runParts;
@@ -37,7 +46,7 @@ public final class TriangleMesh {
   }
 
   public int vertexCount() {
-    return coordinates.length / 3;
+    return vertices;
   }
 
   public int triangleCount() {
@@ -47,6 +56,11 @@ public final class TriangleMesh {
   /** The vertex at corner 0, 1 or 2 of a triangle. */
   public int corner(int triangle, int k) {
     return corners[3 * triangle + k];
+  }
+
+  /** The vertex at which half-edge 3t + k begins: corner k of triangle t. */
+  int from(int half) {
+    return corners[half];
   }
 
   public double x(int vertex) {
@@ -77,7 +91,7 @@ public final class TriangleMesh {
 
   private Vector3 extreme(int sign) {
     double[] least = {Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY, Double.POSITIVE_INFINITY};
-    for (int k = 0; k < coordinates.length; k++) {
+    for (int k = 0; k < 3 * vertices; k++) {
       least[k % 3] = Math.min(least[k % 3], sign * coordinates[k]);
     }
     return new Vector3(sign * least[0], sign * least[1], sign * least[2]);

@@ -9,8 +9,7 @@ import java.util.Map;
 /**
  * Gathers the triangles of a file; points with equal coordinates become one vertex.
  *
- * <p>The vertices stand in a hash table of open addresses, with no object for any of them. Arrays
- * grow with what is read, never by a count in a file.
+ * <p>Arrays grow with what is read, never by a count that only a file states.
  */
 public final class TriangleMeshBuilder implements TriangleSink {
   private static final int FIRST_ROOM = 1 << 10;
@@ -18,23 +17,31 @@ public final class TriangleMeshBuilder implements TriangleSink {
   /** Some virtual machines refuse arrays closer to the largest int. */
   private static final int LARGEST_ROOM = Integer.MAX_VALUE - 8;
 
-  private static final int EMPTY = -1;
+  /** An array of coordinates up to this much too long is not copied into a shorter one. */
+  private static final double MOST_SLACK = 1.05;
 
-  private double[] coordinates = new double[3 * FIRST_ROOM];
-  private int[] corners = new int[3 * FIRST_ROOM];
-  private int[] table = emptyTable(4 * FIRST_ROOM);
-  private int vertices;
+  private final VertexTable vertices;
+  private int[] corners;
   private int triangles;
-  private long points;
-  private int degenerate;
   private final Map<String, Integer> parts = new LinkedHashMap<>();
   private final List<Integer> runStarts = new ArrayList<>();
   private final List<Integer> runParts = new ArrayList<>();
 
-  private static int[] emptyTable(int size) {
-    int[] table = new int[size];
-    Arrays.fill(table, EMPTY);
-    return table;
+  public TriangleMeshBuilder() {
+    this(new VertexTable(), new int[3 * FIRST_ROOM]);
+  }
+
+  private TriangleMeshBuilder(VertexTable vertices, int[] corners) {
+    this.vertices = vertices;
+    this.corners = corners;
+  }
+
+  /** A builder of one part that has been told all; it takes over what it is given. */
+  static TriangleMeshBuilder holding(VertexTable vertices, int[] corners) {
+    TriangleMeshBuilder builder = new TriangleMeshBuilder(vertices, corners);
+    builder.part("");
+    builder.triangles = corners.length / 3;
+    return builder;
   }
 
   @Override
@@ -51,55 +58,7 @@ public final class TriangleMeshBuilder implements TriangleSink {
 
   @Override
   public int vertex(double x, double y, double z) {
-    points++;
-    // Adding zero makes −0 into 0.
-    double px = x + 0.0;
-    double py = y + 0.0;
-    double pz = z + 0.0;
-    int mask = table.length - 1;
-    int slot = hash(px, py, pz) & mask;
-    for (int found = table[slot]; found != EMPTY; found = table[slot]) {
-      int at = 3 * found;
-      if (coordinates[at] == px && coordinates[at + 1] == py && coordinates[at + 2] == pz) {
-        return found;
-      }
-      slot = (slot + 1) & mask;
-    }
-    if (3 * vertices == coordinates.length) {
-      coordinates = Arrays.copyOf(coordinates, moreRoom(coordinates.length));
-    }
-    int at = 3 * vertices;
-    coordinates[at] = px;
-    coordinates[at + 1] = py;
-    coordinates[at + 2] = pz;
-    table[slot] = vertices;
-    vertices++;
-    if (vertices > table.length / 2 && table.length < 1 << 30) {
-      widen();
-    }
-    return vertices - 1;
-  }
-
-  private static int hash(double x, double y, double z) {
-    long bits =
-        Double.doubleToRawLongBits(x)
-            + 0x9E3779B97F4A7C15L * Double.doubleToRawLongBits(y)
-            + 0xC2B2AE3D27D4EB4FL * Double.doubleToRawLongBits(z);
-    bits = (bits ^ bits >>> 32) * 0xD6E8FEB86659FD93L;
-    return (int) (bits ^ bits >>> 32);
-  }
-
-  private void widen() {
-    table = emptyTable(2 * table.length);
-    int mask = table.length - 1;
-    for (int v = 0; v < vertices; v++) {
-      int at = 3 * v;
-      int slot = hash(coordinates[at], coordinates[at + 1], coordinates[at + 2]) & mask;
-      while (table[slot] != EMPTY) {
-        slot = (slot + 1) & mask;
-      }
-      table[slot] = v;
-    }
+    return vertices.vertex(x, y, z);
   }
 
   /** Half as much room again, a whole number of triples. */
@@ -114,7 +73,6 @@ public final class TriangleMeshBuilder implements TriangleSink {
 
   @Override
   public void triangle(int a, int b, int c) {
-    degenerate += a == b || b == c || c == a ? 1 : 0;
     if (runStarts.isEmpty()) {
       part("");
     }
@@ -128,32 +86,26 @@ public final class TriangleMeshBuilder implements TriangleSink {
     triangles++;
   }
 
-  /** Points that were told, welded or not. */
-  public long pointCount() {
-    return points;
-  }
-
-  /** Triangles of which two corners are one vertex. */
-  public int degenerateCount() {
-    return degenerate;
-  }
-
   /**
    * The mesh. Afterwards nothing more can be told.
    *
    * @param scale by which every coordinate is multiplied
    */
   public TriangleMesh build(double scale) {
-    table = new int[0];
-    double[] scaled = Arrays.copyOf(coordinates, 3 * vertices);
-    coordinates = new double[0];
-    for (int k = 0; k < scaled.length && scale != 1; k++) {
+    int count = vertices.size();
+    double[] scaled = vertices.takeCoordinates();
+    if (scaled.length > 3 * count * MOST_SLACK) {
+      scaled = Arrays.copyOf(scaled, 3 * count);
+    }
+    for (int k = 0; k < 3 * count && scale != 1; k++) {
       scaled[k] *= scale;
     }
-    int[] trimmed = Arrays.copyOf(corners, 3 * triangles);
+    int[] trimmed =
+        corners.length == 3 * triangles ? corners : Arrays.copyOf(corners, 3 * triangles);
     corners = new int[0];
     return new TriangleMesh(
         scaled,
+        count,
         trimmed,
         runStarts.stream().mapToInt(k -> k).toArray(),
         runParts.stream().mapToInt(k -> k).toArray(),

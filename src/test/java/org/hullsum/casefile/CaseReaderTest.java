@@ -106,7 +106,7 @@ class CaseReaderTest {
   void overrideStandsInThePlaceOfAParameter() {
     String text = CaseTexts.completed("parameters: {a: 1 m, b: 2*a}\n");
     ReadOptions options =
-        new ReadOptions(CaseTexts.NAME, Map.of("a", "5 m ± 1 cm (k=1)"), List.of());
+        new ReadOptions(CaseTexts.NAME, Map.of("a", "5 m ± 1 cm (k=1)"), List.of(), 1);
     Case found = CaseTexts.read(text, options).found().orElseThrow();
 
     assertEquals(5, value(found, "a"));
@@ -116,7 +116,7 @@ class CaseReaderTest {
 
   @Test
   void overrideOfNoParameterIsReportedWithTheNearest() {
-    ReadOptions options = new ReadOptions(CaseTexts.NAME, Map.of("radus", "5 m"), List.of());
+    ReadOptions options = new ReadOptions(CaseTexts.NAME, Map.of("radus", "5 m"), List.of(), 1);
     List<Problem> problems = CaseTexts.read(CaseTexts.goodCase(), options).problems();
 
     assertEquals(1, problems.size());
@@ -127,7 +127,7 @@ class CaseReaderTest {
 
   @Test
   void overrideThatIsNoQuantityIsReportedAtItsOwnPlace() {
-    ReadOptions options = new ReadOptions(CaseTexts.NAME, Map.of("radius", "5 mtr"), List.of());
+    ReadOptions options = new ReadOptions(CaseTexts.NAME, Map.of("radius", "5 mtr"), List.of(), 1);
     List<Problem> problems = CaseTexts.read(CaseTexts.goodCase(), options).problems();
 
     assertEquals("--set radius:1:3", problems.get(0).place().toString());

@@ -51,7 +51,7 @@ class MeshSurfaceReaderTest {
             + "  plate:\n    flux: none\n    surface: {"
             + surface
             + "}\n");
-    return CaseReader.read(file, new ReadOptions("case.yaml", Map.of(), allowed));
+    return CaseReader.read(file, new ReadOptions("case.yaml", Map.of(), allowed, 1));
   }
 
   private String problem(String surface) throws IOException {
