@@ -2,6 +2,7 @@ package org.hullsum.flux;
 
 import java.util.Arrays;
 import java.util.Optional;
+import java.util.OptionalInt;
 import org.hullsum.mesh.TriangleMesh;
 import org.hullsum.numeric.Vector3;
 import org.hullsum.quadrature.Accuracy;
@@ -12,6 +13,11 @@ import org.hullsum.quadrature.ParameterPoint;
 final class MeshCone implements Cone {
   private static final int POINTS =
       MeshIntegrator.BLOCK * (TriangleRule.DEGREE_5.size() + TriangleRule.DEGREE_8.size());
+
+  /** Up to so many triangles ∬|g| takes more points than ∬g. */
+  private static final int FEW = 4096;
+
+  private static final int MAGNITUDE = 5;
 
   /** Stands for {@link #bad}. */
   private static final ParameterPoint SOMEWHERE = new ParameterPoint(0, 0);
@@ -37,7 +43,7 @@ final class MeshCone implements Cone {
 
   @Override
   public Integral[] integrate(Accuracy accuracy) {
-    MeshIntegrator integrator = new MeshIntegrator(new Heights(), -1);
+    MeshIntegrator integrator = new MeshIntegrator(new Heights(), degree());
     integrator.integrate(
         mesh, accuracy.relative(), accuracy.absolute(), accuracy.evaluationLimit());
     Integral[] parts = new Integral[rows];
@@ -59,6 +65,15 @@ final class MeshCone implements Cone {
               finite ? Optional.empty() : Optional.of(SOMEWHERE));
     }
     return parts;
+  }
+
+  /** The height is the same all over a triangle, so that the degree is that of the densities. */
+  private int degree() {
+    OptionalInt degree = rays.orElseThrow().degree();
+    if (degree.isEmpty()) {
+      return -1;
+    }
+    return mesh.triangleCount() < FEW ? Math.max(degree.getAsInt(), MAGNITUDE) : degree.getAsInt();
   }
 
   @Override

@@ -10,10 +10,11 @@ import org.hullsum.numeric.Vector3;
  * bound on their error.
  *
  * <p>Where the integrand is a polynomial whose degree is known one rule is exact. Otherwise each
- * triangle is done by rules of degree 5 and 8; their difference is taken for the error, and
- * triangles that take more than their share of what is allowed are divided into four, level by
- * level. Triangles are taken in blocks and sums compensated block by block, so that the result does
- * not depend on anything else. Not thread-safe.
+ * triangle is done by seven points, which serve a rule of degree 5 and one of degree 2 within it;
+ * their difference is taken for the error. Triangles that take more than their share of what is
+ * allowed are done by rules of degree 5 and 8, and then divided into four, level by level.
+ * Triangles are taken in blocks and sums compensated block by block, so that the result does not
+ * depend on anything else. Not thread-safe.
  */
 final class MeshIntegrator {
   /** Triangles of one block. */
@@ -26,12 +27,13 @@ final class MeshIntegrator {
   private static final double ROUNDING = 4 * Math.ulp(1.0);
 
   private final Integrand integrand;
-  private final TriangleRule[] rules;
-  private final int points;
+  private final Stage first;
+  private final Stage later;
   private final double[][] positions;
   private final double[][] areas;
   private final double[][] values;
   private final double[] sums;
+  private final double[] blockSums;
   private final double[] rests;
   private double magnitude;
   private double error;
@@ -60,23 +62,49 @@ final class MeshIntegrator {
    */
   MeshIntegrator(Integrand integrand, int degree) {
     this.integrand = integrand;
-    this.rules = rules(degree);
-    this.points = Arrays.stream(rules).mapToInt(TriangleRule::size).sum();
+    this.first = first(degree);
+    this.later = new Stage(TriangleRule.DEGREE_5, TriangleRule.DEGREE_8);
+    int points = Math.max(first.size(), later.size());
     this.positions = new double[3][BLOCK * points];
     this.areas = new double[3][BLOCK * points];
     this.values = new double[integrand.components()][BLOCK * points];
     this.sums = new double[integrand.components()];
+    this.blockSums = new double[integrand.components()];
     this.rests = new double[integrand.components()];
   }
 
-  private static TriangleRule[] rules(int degree) {
+  private static Stage first(int degree) {
     for (TriangleRule rule :
-        new TriangleRule[] {TriangleRule.CENTROID, TriangleRule.DEGREE_5, TriangleRule.DEGREE_8}) {
+        new TriangleRule[] {
+          TriangleRule.CENTROID, TriangleRule.DEGREE_2, TriangleRule.DEGREE_5, TriangleRule.DEGREE_8
+        }) {
       if (degree >= 0 && degree <= rule.degree()) {
-        return new TriangleRule[] {rule};
+        return new Stage(rule, rule);
       }
     }
-    return new TriangleRule[] {TriangleRule.DEGREE_5, TriangleRule.DEGREE_8};
+    return new Stage(TriangleRule.WITHIN_5, TriangleRule.DEGREE_5);
+  }
+
+  /** A rule and one that is trusted more; they may stand on the same points. */
+  private record Stage(TriangleRule rough, TriangleRule fine) {
+    boolean onOneSet() {
+      return rough != fine && rough.size() == fine.size();
+    }
+
+    /** Whether the fine rule is exact. */
+    boolean exact() {
+      return rough == fine;
+    }
+
+    /** Where the fine rule's points begin. */
+    int fineFrom() {
+      return exact() || onOneSet() ? 0 : rough.size();
+    }
+
+    /** Points of each triangle. */
+    int size() {
+      return fineFrom() + fine.size();
+    }
   }
 
   /** Triangles to be done, by their corners: nine numbers each. */
@@ -84,11 +112,11 @@ final class MeshIntegrator {
     private double[] corners = new double[9 * BLOCK];
     private int size;
 
-    void add(double[] nine) {
+    void add(double[] from, int at) {
       if (9 * size == corners.length) {
         corners = Arrays.copyOf(corners, 2 * corners.length);
       }
-      System.arraycopy(nine, 0, corners, 9 * size++, 9);
+      System.arraycopy(from, at, corners, 9 * size++, 9);
     }
   }
 
@@ -101,10 +129,10 @@ final class MeshIntegrator {
    */
   void integrate(TriangleMesh mesh, double relative, double absolute, long limit) {
     int count = mesh.triangleCount();
-    Pending level = new Pending();
-    double[] nine = new double[9];
-    // The first pass tells the magnitude; what it leaves open is divided afterwards.
+    Pending block = new Pending();
+    Pending doubtful = new Pending();
     Pending open = new Pending();
+    double[] nine = new double[9];
     double allowed = Math.max(absolute, relative * coarseMagnitude(mesh));
     double share = allowed / Math.max(1, count);
     for (int t = 0; t < count; t++) {
@@ -114,10 +142,12 @@ final class MeshIntegrator {
         nine[3 * k + 1] = mesh.y(v);
         nine[3 * k + 2] = mesh.z(v);
       }
-      level.add(nine);
-      if (level.size == BLOCK || t == count - 1) {
-        pass(level, share, limit, open);
-        level.size = 0;
+      block.add(nine, 0);
+      if (block.size == BLOCK || t == count - 1) {
+        pass(first, block, share, limit, doubtful);
+        pass(later, doubtful, share, limit, open);
+        block.size = 0;
+        doubtful.size = 0;
       }
     }
     for (int depth = 1; depth <= DEEPEST && open.size > 0; depth++) {
@@ -128,7 +158,7 @@ final class MeshIntegrator {
       for (int i = 0; i < open.size; i++) {
         divide(open.corners, 9 * i, children);
         if (children.size + 4 > BLOCK || i == open.size - 1) {
-          pass(children, last ? Double.POSITIVE_INFINITY : share, limit, next);
+          pass(later, children, last ? Double.POSITIVE_INFINITY : share, limit, next);
           children.size = 0;
         }
       }
@@ -174,70 +204,69 @@ final class MeshIntegrator {
       System.arraycopy(from, at + 3 * k, nine, 0, 3);
       System.arraycopy(m, 3 * k, nine, 3, 3);
       System.arraycopy(m, 3 * ((k + 2) % 3), nine, 6, 3);
-      into.add(nine);
+      into.add(nine, 0);
     }
-    into.add(m);
+    into.add(m, 0);
   }
 
   /** One block: what is within its share is summed, the rest goes to {@code open}. */
-  private void pass(Pending block, double share, long limit, Pending open) {
+  private void pass(Stage stage, Pending block, double share, long limit, Pending open) {
+    int points = stage.size();
     for (int i = 0; i < block.size; i++) {
-      place(block.corners, 9 * i, i * points);
+      place(stage, block.corners, 9 * i, i * points);
     }
     int total = block.size * points;
     integrand.evaluate(total, positions, areas, values);
     evaluations += total;
-    double[] sum = new double[sums.length];
+    Arrays.fill(blockSums, 0);
     for (int i = 0; i < block.size; i++) {
-      int first = i * points;
-      double[] fine = new double[sums.length];
-      double[] absolute = new double[1];
-      double difference = weigh(first, fine, absolute);
+      int at = i * points;
+      double fine = weigh(stage.fine(), 0, at + stage.fineFrom());
+      double difference = stage.exact() ? 0 * fine : Math.abs(fine - weigh(stage.rough(), 0, at));
       if (Double.isNaN(difference) && nonFiniteAt.isEmpty()) {
-        nonFiniteAt = badPoint(first);
+        nonFiniteAt = badPoint(at, points);
       }
       if (difference > share && evaluations < limit) {
-        open.add(Arrays.copyOfRange(block.corners, 9 * i, 9 * i + 9));
+        open.add(block.corners, 9 * i);
         continue;
       }
-      for (int k = 0; k < sum.length; k++) {
-        sum[k] += fine[k];
+      blockSums[0] += fine;
+      for (int k = 1; k < blockSums.length; k++) {
+        blockSums[k] += weigh(stage.fine(), k, at + stage.fineFrom());
       }
-      magnitude += absolute[0];
-      error += difference + ROUNDING * absolute[0];
+      double absolute = weighMagnitude(stage.fine(), at + stage.fineFrom());
+      magnitude += absolute;
+      error += difference + ROUNDING * absolute;
     }
-    for (int k = 0; k < sum.length; k++) {
+    for (int k = 0; k < blockSums.length; k++) {
       double before = sums[k];
-      double after = before + sum[k];
+      double more = blockSums[k];
+      double after = before + more;
       rests[k] +=
-          Math.abs(before) >= Math.abs(sum[k]) ? before - after + sum[k] : sum[k] - after + before;
+          Math.abs(before) >= Math.abs(more) ? before - after + more : more - after + before;
       sums[k] = after;
     }
   }
 
-  /** The integrals over one triangle by the finest rule; how the first differs by the others. */
-  private double weigh(int first, double[] fine, double[] absolute) {
-    int at = first;
-    double coarse = Double.NaN;
-    for (int r = 0; r < rules.length; r++) {
-      TriangleRule rule = rules[r];
-      if (r > 0) {
-        coarse = fine[0];
-      }
-      Arrays.fill(fine, 0);
-      absolute[0] = 0;
-      for (int j = 0; j < rule.size(); j++) {
-        for (int k = 0; k < fine.length; k++) {
-          fine[k] += rule.weight(j) * values[k][at];
-        }
-        absolute[0] += rule.weight(j) * Math.abs(values[0][at]);
-        at++;
-      }
+  private double weigh(TriangleRule rule, int component, int at) {
+    double[] row = values[component];
+    double sum = 0;
+    for (int j = 0; j < rule.size(); j++) {
+      sum += rule.weight(j) * row[at + j];
     }
-    return rules.length > 1 ? Math.abs(fine[0] - coarse) : 0 * fine[0];
+    return sum;
   }
 
-  private Optional<Vector3> badPoint(int first) {
+  private double weighMagnitude(TriangleRule rule, int at) {
+    double[] row = values[0];
+    double sum = 0;
+    for (int j = 0; j < rule.size(); j++) {
+      sum += rule.weight(j) * Math.abs(row[at + j]);
+    }
+    return sum;
+  }
+
+  private Optional<Vector3> badPoint(int first, int points) {
     for (int at = first; at < first + points; at++) {
       for (double[] row : values) {
         if (!Double.isFinite(row[at])) {
@@ -248,7 +277,7 @@ final class MeshIntegrator {
     return Optional.empty();
   }
 
-  private void place(double[] c, int at, int first) {
+  private void place(Stage stage, double[] c, int at, int start) {
     double bx = c[at + 3] - c[at];
     double by = c[at + 4] - c[at + 1];
     double bz = c[at + 5] - c[at + 2];
@@ -258,19 +287,17 @@ final class MeshIntegrator {
     double nx = 0.5 * (by * cz - bz * cy);
     double ny = 0.5 * (bz * cx - bx * cz);
     double nz = 0.5 * (bx * cy - by * cx);
-    int to = first;
-    for (TriangleRule rule : rules) {
-      for (int j = 0; j < rule.size(); j++) {
-        double s = rule.second(j);
-        double t = rule.third(j);
-        positions[0][to] = c[at] + s * bx + t * cx;
-        positions[1][to] = c[at + 1] + s * by + t * cy;
-        positions[2][to] = c[at + 2] + s * bz + t * cz;
-        areas[0][to] = nx;
-        areas[1][to] = ny;
-        areas[2][to] = nz;
-        to++;
-      }
+    for (int i = start; i < start + stage.size(); i++) {
+      TriangleRule rule = i < start + stage.fineFrom() ? stage.rough() : stage.fine();
+      int j = i < start + stage.fineFrom() ? i - start : i - start - stage.fineFrom();
+      double s = rule.second(j);
+      double t = rule.third(j);
+      positions[0][i] = c[at] + s * bx + t * cx;
+      positions[1][i] = c[at + 1] + s * by + t * cy;
+      positions[2][i] = c[at + 2] + s * bz + t * cz;
+      areas[0][i] = nx;
+      areas[1][i] = ny;
+      areas[2][i] = nz;
     }
   }
 

@@ -1,6 +1,7 @@
 package org.hullsum.flux;
 
 import java.util.Arrays;
+import java.util.OptionalInt;
 import org.hullsum.numeric.Vector3;
 import org.hullsum.quadrature.GaussRule;
 
@@ -58,6 +59,11 @@ final class RayIntegrals {
       }
     }
     return new GaussRule[] {GaussRule.of(LEVELS[level][0]), GaussRule.of(LEVELS[level][1])};
+  }
+
+  /** The degree of the densities in x, y, z where they are polynomials that one rule does. */
+  OptionalInt degree() {
+    return rules.length == 1 ? densities.degree() : OptionalInt.empty();
   }
 
   /** Rows that {@link #integrate} writes: one per density, then ∫|g| s^k ds of the first, error. */

@@ -7,8 +7,8 @@ import org.hullsum.numeric.Interval;
 import org.hullsum.numeric.Vector3;
 
 /**
- * A tree of boxes around the triangles of a mesh, for lines through it. Halved at the median along
- * the longer side, in flat arrays; about 20 bytes a triangle. Immutable and thread-safe.
+ * A tree of boxes around the triangles of a mesh, for lines through it: halves of halves in {@link
+ * MortonOrder}, in flat arrays; about 20 bytes a triangle. Immutable and thread-safe.
  */
 public final class TriangleTree {
   private static final int LEAF = 8;
@@ -31,10 +31,7 @@ public final class TriangleTree {
   private TriangleTree(TriangleMesh mesh) {
     this.mesh = mesh;
     int count = mesh.triangleCount();
-    this.order = new int[count];
-    for (int t = 0; t < count; t++) {
-      order[t] = t;
-    }
+    this.order = MortonOrder.of(mesh);
     int levels = 0;
     while (count >> levels > LEAF) {
       levels++;
@@ -44,13 +41,23 @@ public final class TriangleTree {
     build(1, 0, count, 0);
   }
 
-  /** Builds the tree; O(n log n). */
+  /** Builds the tree; linear in the number of triangles. */
   public static TriangleTree of(TriangleMesh mesh) {
     return new TriangleTree(mesh);
   }
 
   private void build(int node, int from, int to, int level) {
     int at = 6 * node;
+    if (level < depth) {
+      int middle = (from + to) >>> 1;
+      build(2 * node, from, middle, level + 1);
+      build(2 * node + 1, middle, to, level + 1);
+      for (int k = 0; k < 3; k++) {
+        boxes[at + k] = Math.min(boxes[2 * at + k], boxes[2 * at + 6 + k]);
+        boxes[at + 3 + k] = Math.max(boxes[2 * at + 3 + k], boxes[2 * at + 9 + k]);
+      }
+      return;
+    }
     for (int k = 0; k < 3; k++) {
       boxes[at + k] = Double.POSITIVE_INFINITY;
       boxes[at + 3 + k] = Double.NEGATIVE_INFINITY;
@@ -63,63 +70,11 @@ public final class TriangleTree {
         widen(at, 2, mesh.z(v));
       }
     }
-    if (level == depth) {
-      return;
-    }
-    int axis = 0;
-    for (int k = 1; k < 3; k++) {
-      axis = boxes[at + 3 + k] - boxes[at + k] > boxes[at + 3 + axis] - boxes[at + axis] ? k : axis;
-    }
-    int middle = (from + to) >>> 1;
-    select(from, to, middle, axis);
-    build(2 * node, from, middle, level + 1);
-    build(2 * node + 1, middle, to, level + 1);
   }
 
   private void widen(int at, int k, double value) {
     boxes[at + k] = Math.min(boxes[at + k], value);
     boxes[at + 3 + k] = Math.max(boxes[at + 3 + k], value);
-  }
-
-  /** Three times the centroid along an axis. */
-  private double key(int triangle, int axis) {
-    double sum = 0;
-    for (int k = 0; k < 3; k++) {
-      int v = mesh.corner(triangle, k);
-      sum += axis == 0 ? mesh.x(v) : axis == 1 ? mesh.y(v) : mesh.z(v);
-    }
-    return sum;
-  }
-
-  /** Brings what belongs before the middle before it (C. A. R. Hoare's selection, 1961). */
-  private void select(int from, int to, int middle, int axis) {
-    int low = from;
-    int high = to - 1;
-    while (low < high) {
-      double pivot = key(order[(low + high) >>> 1], axis);
-      int i = low;
-      int j = high;
-      while (i <= j) {
-        while (key(order[i], axis) < pivot) {
-          i++;
-        }
-        while (key(order[j], axis) > pivot) {
-          j--;
-        }
-        if (i <= j) {
-          int swapped = order[i];
-          order[i++] = order[j];
-          order[j--] = swapped;
-        }
-      }
-      if (middle <= j) {
-        high = j;
-      } else if (middle >= i) {
-        low = i;
-      } else {
-        return;
-      }
-    }
   }
 
   public TriangleMesh mesh() {
