@@ -50,9 +50,10 @@ final class CaseAudit {
   CaseResult run() {
     LineInspection lines = new LineInspection(audited);
     Supplier<List<LineInspection.Seen>> seen = workers.begin(lines::look);
-    List<PatchAudit> patches = integratePatches();
-    List<SurfaceAudit> surfaces = inspectSurfaces(patches, seen.get());
-    FacingAudit facings = new FacingAudit(patches, surfaces);
+    List<PatchAudit> drawnPatches = integratePatches();
+    List<SurfaceAudit> surfaces = inspectSurfaces(drawnPatches, seen.get());
+    FacingAudit facings = new FacingAudit(drawnPatches, surfaces);
+    List<PatchAudit> patches = drawnPatches.stream().map(facings::resolved).toList();
     List<SingularityAudit> onPatches = inspectPatches(patches);
     List<SingularityAudit> inVolumes = inspectVolumes(surfaces);
     List<InteriorAudit> interiors = integrateInteriors(surfaces, inVolumes);

@@ -6,7 +6,8 @@ import org.hullsum.numeric.Vector3;
 
 /**
  * The declared facing as a sign against the construction normal: +1, −1, or 0 where the figure that
- * should tell is zero within its error.
+ * should tell is zero within its error. A patch that is to face outward is taken as drawn until it
+ * is known where outward is.
  */
 final class DeclaredSign implements Facing.Visitor<Integer> {
   /** Rounding of the integrals relative to the area. */
@@ -47,6 +48,11 @@ final class DeclaredSign implements Facing.Visitor<Integer> {
         geometry.moments().get(0) + geometry.moments().get(4) + geometry.moments().get(8);
     double error = 3 * geometry.momentsError() + vectorError() * taxicab(offset);
     return sign(trace + offset.dot(geometry.vectorArea()), error);
+  }
+
+  @Override
+  public Integer outward() {
+    return 1;
   }
 
   private double vectorError() {

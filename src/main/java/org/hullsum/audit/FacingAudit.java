@@ -25,6 +25,9 @@ final class FacingAudit {
   private final Map<String, SurfaceAudit> surfaces = new LinkedHashMap<>();
   private final Map<String, Seen> seen = new LinkedHashMap<>();
 
+  /** The signs, against the construction normal, of patches that are to face as found. */
+  private final Map<String, Integer> turned = new LinkedHashMap<>();
+
   /**
    * What is seen of one patch.
    *
@@ -49,6 +52,17 @@ final class FacingAudit {
 
   Seen of(String patch) {
     return seen.get(patch);
+  }
+
+  /** A patch that is to face outward, facing so; any other as it is. */
+  PatchAudit resolved(PatchAudit patch) {
+    if (!patch.facesAsFound() || patch.degenerate().isPresent()) {
+      return patch;
+    }
+    Integer sign = turned.get(patch.name());
+    return sign != null
+        ? patch.facing(sign)
+        : patch.withoutFacing(seen.get(patch.name()).reason().orElse("it bounds no volume"));
   }
 
   /** Patches found, or leaning, inward: for explanations. */
@@ -89,6 +103,10 @@ final class FacingAudit {
             .map(f -> f.side())
             .filter(s -> s != Side.UNDETERMINED)
             .or(() -> ahead.map(f -> f.side().opposite()).filter(s -> s != Side.UNDETERMINED));
+    if (side.isPresent() && patch.facesAsFound()) {
+      turned.put(patch.name(), side.get().sign());
+      return new Seen(Optional.of(FoundFacing.OUTWARD), Optional.empty(), Optional.empty(), false);
+    }
     if (side.isPresent()) {
       return new Seen(
           Optional.of(declared(side.get(), patch)), Optional.empty(), Optional.empty(), false);

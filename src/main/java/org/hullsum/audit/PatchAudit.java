@@ -9,6 +9,7 @@ import org.hullsum.flux.FluxBasis;
 import org.hullsum.flux.PatchFlux;
 import org.hullsum.flux.PatchGeometry;
 import org.hullsum.flux.PulledBackSurface;
+import org.hullsum.model.Facing;
 import org.hullsum.model.Patch;
 import org.hullsum.quadrature.Integral;
 
@@ -51,6 +52,35 @@ record PatchAudit(
 
   String name() {
     return patch.name();
+  }
+
+  /** Whether its facing is to be found, and was not declared. */
+  boolean facesAsFound() {
+    return surface.isPresent() && patch.facing() instanceof Facing.Outward;
+  }
+
+  /**
+   * The same, facing as found.
+   *
+   * @param found sign against the construction normal, by which a field's flux is turned too
+   */
+  PatchAudit facing(int found) {
+    List<List<Optional<Estimate>>> turned = new ArrayList<>();
+    for (List<Optional<Estimate>> now : claims) {
+      List<Optional<Estimate>> estimates = new ArrayList<>();
+      for (int k = 0; k < now.size(); k++) {
+        boolean follows = patch.claims().get(k).field().isPresent();
+        estimates.add(now.get(k).map(e -> follows ? e.times(found * sign) : e));
+      }
+      turned.add(estimates);
+    }
+    return new PatchAudit(patch, surface, geometry, rims, found, degenerate, fluxes, turned);
+  }
+
+  /** The same where it can't be told which way it faces. */
+  PatchAudit withoutFacing(String reason) {
+    String unknown = "the facing `outward` of `" + name() + "` can't be told: " + reason;
+    return new PatchAudit(patch, surface, geometry, rims, 0, Optional.of(unknown), fluxes, claims);
   }
 
   /** Whether there is a surface, and more to it than a line or a point. */

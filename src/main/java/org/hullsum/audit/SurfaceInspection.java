@@ -102,7 +102,8 @@ final class SurfaceInspection {
             ? Optional.empty()
             : signs.map(s -> MomentClosure.of(moments, s, MomentClosure.USUAL_SLACK + slack));
     List<String> offered =
-        OrientationSystem.fewestToTurn(part, sewn.patches().stream().map(p -> p.sign()).toList())
+        OrientationSystem.fewestToTurn(
+                part, sewn.patches().stream().map(p -> p.facesAsFound() ? 0 : p.sign()).toList())
             .stream()
             .map(k -> all.get(k).name())
             .toList();

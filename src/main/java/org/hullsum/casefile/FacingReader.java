@@ -8,7 +8,8 @@ import org.hullsum.problem.ProblemKind;
 
 /** Reads which way a patch's normal is declared to point. */
 final class FacingReader {
-  private static final List<String> WORDS = List.of("as-drawn", "reversed", "upward", "downward");
+  private static final List<String> WORDS =
+      List.of("as-drawn", "reversed", "outward", "upward", "downward");
   private static final List<String> KEYS = List.of("along", "away-from");
 
   private final FormulaReader formulas;
@@ -53,21 +54,13 @@ final class FacingReader {
   }
 
   private Optional<Facing> word(YamlText text) {
-    if (text.text().equals("outward")) {
-      values
-          .problems()
-          .add(
-              ProblemKind.NOT_SUPPORTED,
-              text.place(),
-              "`facing: outward` is not supported yet; use as-drawn, reversed, along or away-from");
-      return Optional.empty();
-    }
     return values
         .word(text, "`facing` (or {along: VECTOR}, {away-from: POINT})", WORDS)
         .map(
             word ->
                 switch (word) {
                   case "reversed" -> new Facing.Reversed();
+                  case "outward" -> new Facing.Outward();
                   case "upward" -> new Facing.Along(Vector3.Z, word);
                   case "downward" -> new Facing.Along(Vector3.Z.negated(), word);
                   default -> new Facing.AsDrawn();

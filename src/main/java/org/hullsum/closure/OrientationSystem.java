@@ -105,7 +105,8 @@ public final class OrientationSystem {
    * The patches to turn in open shells, where no side is outward: of the two ways to make the
    * normals agree the one that turns fewer.
    *
-   * @param declared +1 for each patch declared along its construction normal, −1 against
+   * @param declared +1 for each patch declared along its construction normal, −1 against, 0 for one
+   *     that faces as it is found and is not turned
    */
   public static List<Integer> fewestToTurn(Part part, List<Integer> declared) {
     List<Integer> turned = new ArrayList<>();
@@ -116,9 +117,10 @@ public final class OrientationSystem {
       List<Integer> with = new ArrayList<>();
       List<Integer> against = new ArrayList<>();
       for (int k = 0; k < shell.patches().size(); k++) {
-        int patch = part.patch(shell, k);
-        boolean along = part.value(shell, k) == declared.get(shell.patches().get(k));
-        (along ? with : against).add(patch);
+        int sign = declared.get(shell.patches().get(k));
+        if (sign != 0) {
+          (part.value(shell, k) == sign ? with : against).add(part.patch(shell, k));
+        }
       }
       turned.addAll(with.size() < against.size() ? with : against);
     }

@@ -14,6 +14,8 @@ public sealed interface Facing {
     R along(Along facing);
 
     R awayFrom(AwayFrom facing);
+
+    R outward();
   }
 
   <R> R accept(Visitor<R> visitor);
@@ -44,6 +46,19 @@ public sealed interface Facing {
     @Override
     public String text() {
       return "reversed";
+    }
+  }
+
+  /** Out of the volume that the patch leaves, or into the one that it enters, as found. */
+  record Outward() implements Facing {
+    @Override
+    public <R> R accept(Visitor<R> visitor) {
+      return visitor.outward();
+    }
+
+    @Override
+    public String text() {
+      return "outward";
     }
   }
 

@@ -142,12 +142,6 @@ class OneFaultTest {
             ProblemKind.WRONG_VALUE,
             "disk and sphere"),
         fault(
-            "outward",
-            "facing: downward",
-            "facing: ¤outward",
-            ProblemKind.NOT_SUPPORTED,
-            "not supported yet"),
-        fault(
             "table",
             "{metered: 9.5 m3/h ± 1 %, within: [0 m3/h, 60 m3/h]}",
             "{metered: {¤file: a.csv}}",
