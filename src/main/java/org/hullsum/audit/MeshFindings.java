@@ -37,9 +37,7 @@ final class MeshFindings implements PatchSurface.Visitor<List<Finding>> {
   @Override
   public List<Finding> triangles(PatchSurface.Triangles surface) {
     MeshTopology topology = surface.topology();
-    long against = 0;
     for (MeshShell shell : topology.shells()) {
-      against += shell.against();
       if (!shell.orientable()) {
         add(
             FindingCode.ORIENTATION_CONFLICT,
@@ -52,8 +50,8 @@ final class MeshFindings implements PatchSurface.Visitor<List<Finding>> {
             Map.of("triangles", shell.triangles()));
       }
     }
-    if (against > 0) {
-      addTurned(topology, against);
+    if (topology.againstCount() > 0) {
+      addTurned(topology, topology.againstCount());
     }
     if (topology.crowdedEdgeCount() > 0) {
       add(
@@ -105,19 +103,12 @@ final class MeshFindings implements PatchSurface.Visitor<List<Finding>> {
         evidence);
   }
 
-  /** The first triangle that belongs to the fewer of its shell. */
   private static int firstAgainst(MeshTopology topology) {
-    for (MeshShell shell : topology.shells()) {
-      if (shell.against() > 0) {
-        boolean fewAreTurned = shell.toTurn() == shell.against();
-        for (int t = shell.first(); t < topology.mesh().triangleCount(); t++) {
-          if (topology.isToTurn(t) == fewAreTurned) {
-            return t;
-          }
-        }
-      }
+    int first = 0;
+    while (!topology.isAgainst(first)) {
+      first++;
     }
-    return 0;
+    return first;
   }
 
   private void add(FindingCode code, String message, Map<String, Object> evidence) {

@@ -37,10 +37,8 @@ final class MeshSurfaceReader {
     }
     return mesh(file.get(), name.get(), scale.getAsDouble())
         .flatMap(mesh -> part.isPresent() ? part(mesh, part.get()) : Optional.of(mesh))
-        .map(
-            mesh ->
-                new PatchSurface.Triangles(
-                    MeshTopology.of(mesh, files.threads()), TriangleTree.of(mesh)));
+        .map(TriangleTree::of)
+        .map(tree -> new PatchSurface.Triangles(MeshTopology.of(tree, files.threads()), tree));
   }
 
   /** From the file's unit of length to the working one, times {@code scale}. */

@@ -18,13 +18,17 @@ public final class MeshTopology {
   private final TriangleMesh mesh;
   private final EdgePairing pairing;
   private final BitSet turned;
+
+  /** Triangles of closed shells. */
+  private final BitSet inClosed = new BitSet();
+
   private final List<MeshShell> shells;
   private final List<MeshLoop> loops;
   private final int degenerate;
   private final int duplicates;
 
-  private MeshTopology(TriangleMesh mesh, int threads) {
-    this.mesh = mesh;
+  private MeshTopology(TriangleTree tree, int threads) {
+    this.mesh = tree.mesh();
     BitSet leftOut = new BitSet();
     for (int t = 0; t < mesh.triangleCount(); t++) {
       if (isDegenerate(t)) {
@@ -36,22 +40,23 @@ public final class MeshTopology {
     this.duplicates = leaveOutDuplicates(first, leftOut);
     this.pairing = duplicates > 0 ? EdgePairing.of(mesh, leftOut, threads) : first;
     this.turned = new BitSet();
-    this.shells = findShells(leftOut);
+    this.shells = new ShellNesting(tree, findShells(leftOut), pairing).turnCavities(turned);
     this.loops = new MeshLoops(mesh, pairing).loops();
   }
 
   /** Looks at a mesh, on one thread. */
   public static MeshTopology of(TriangleMesh mesh) {
-    return of(mesh, 1);
+    return of(TriangleTree.of(mesh), 1);
   }
 
   /**
    * Looks at a mesh.
    *
+   * @param tree of the mesh
    * @param threads that may be used; the result does not depend on it
    */
-  public static MeshTopology of(TriangleMesh mesh, int threads) {
-    return new MeshTopology(mesh, threads);
+  public static MeshTopology of(TriangleTree tree, int threads) {
+    return new MeshTopology(tree, threads);
   }
 
   private boolean isDegenerate(int t) {
@@ -144,9 +149,12 @@ public final class MeshTopology {
         }
       }
     }
-    boolean turnAll = closed && orientable ? sums.volume() < 0 : 2 * against > size;
-    for (int i = 0; i < size && turnAll; i++) {
-      turned.flip(queue[i]);
+    boolean bounds = closed && orientable;
+    boolean turnAll = bounds ? sums.volume() < 0 : 2 * against > size;
+    for (int i = 0; i < size; i++) {
+      int t = queue[i];
+      turned.set(t, orientable && turned.get(t) != turnAll);
+      inClosed.set(t, bounds);
     }
     int toTurn = turnAll ? size - against : against;
     return new MeshShell(
@@ -154,8 +162,9 @@ public final class MeshTopology {
         size,
         closed,
         orientable,
+        false,
         orientable ? toTurn : 0,
-        Math.min(against, size - against),
+        orientable ? Math.min(against, size - against) : 0,
         Math.abs(sums.volume()));
   }
 
@@ -174,11 +183,35 @@ public final class MeshTopology {
   }
 
   /**
-   * Whether a triangle is to be turned: in a closed shell so that all face out of what the shell
-   * encloses, in an open one so that all agree, the fewer being turned.
+   * Whether a triangle is to be turned: in a closed shell so that all face out of what the mesh
+   * encloses, a shell within another being a cavity; in an open one so that all agree, the fewer
+   * being turned.
    */
   public boolean isToTurn(int triangle) {
     return turned.get(triangle);
+  }
+
+  /**
+   * Triangles that face against the others, the fewer: of all closed shells together, and of each
+   * open one.
+   */
+  public long againstCount() {
+    long open = shells.stream().filter(s -> !s.bounds()).mapToLong(MeshShell::against).sum();
+    return open + Math.min(closedToTurn(), closedTriangles() - closedToTurn());
+  }
+
+  /** Whether a triangle is one of {@link #againstCount}. */
+  public boolean isAgainst(int triangle) {
+    boolean many = 2 * closedToTurn() > closedTriangles();
+    return turned.get(triangle) != (many && inClosed.get(triangle));
+  }
+
+  private long closedToTurn() {
+    return shells.stream().filter(MeshShell::bounds).mapToLong(MeshShell::toTurn).sum();
+  }
+
+  private long closedTriangles() {
+    return shells.stream().filter(MeshShell::bounds).mapToLong(MeshShell::triangles).sum();
   }
 
   /** Edges that more than two triangles share. */

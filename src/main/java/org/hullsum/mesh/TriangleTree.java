@@ -2,6 +2,7 @@ package org.hullsum.mesh;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import org.hullsum.numeric.Box3;
 import org.hullsum.numeric.Interval;
 import org.hullsum.numeric.Vector3;
@@ -27,6 +28,9 @@ public final class TriangleTree {
       places = List.copyOf(places);
     }
   }
+
+  /** What a line meets: where, and in which triangle. */
+  record Hit(double place, int triangle) {}
 
   private TriangleTree(TriangleMesh mesh) {
     this.mesh = mesh;
@@ -116,10 +120,20 @@ public final class TriangleTree {
    * @param direction of length one
    */
   public LineHits along(Vector3 origin, Vector3 direction, double reach) {
+    LineSearch search = search(origin, direction, reach);
+    return new LineHits(search.hits.stream().map(Hit::place).sorted().toList(), search.doubtful);
+  }
+
+  /** The triangles that such a line crosses, in no order; empty where one of them is doubtful. */
+  Optional<List<Hit>> hits(Vector3 origin, Vector3 direction, double reach) {
+    LineSearch search = search(origin, direction, reach);
+    return search.doubtful ? Optional.empty() : Optional.of(search.hits);
+  }
+
+  private LineSearch search(Vector3 origin, Vector3 direction, double reach) {
     LineSearch search = new LineSearch(origin, direction, reach);
     search.visit(1, 0, order.length, 0);
-    search.places.sort(null);
-    return new LineHits(search.places, search.doubtful);
+    return search;
   }
 
   /** One line. */
@@ -127,7 +141,7 @@ public final class TriangleTree {
     private final Vector3 origin;
     private final Vector3 direction;
     private final double reach;
-    private final List<Double> places = new ArrayList<>();
+    private final List<Hit> hits = new ArrayList<>();
     private boolean doubtful;
 
     LineSearch(Vector3 origin, Vector3 direction, double reach) {
@@ -187,7 +201,7 @@ public final class TriangleTree {
         doubtful = true;
         return;
       }
-      places.add(a.dot(normal) / through);
+      hits.add(new Hit(a.dot(normal) / through, t));
     }
 
     /**

@@ -122,4 +122,37 @@ class MeshTopologyTest {
     System.arraycopy(other, 0, all, one.length, other.length);
     return all;
   }
+
+  @Test
+  void shellWithinAnOddNumberOfOthersIsACavityHoweverTheTrianglesFace() {
+    for (int inward = 0; inward < 16; inward++) {
+      Vector3[][] all = new Vector3[0][];
+      for (int k = 0; k < 4; k++) {
+        // Three one within another, and one beside them.
+        double half = k == 3 ? 0.5 : 3 - k;
+        Vector3 middle = k == 3 ? new Vector3(9, 0, 0) : new Vector3(0.01 * k, 0.02, 0.03);
+        Vector3 corner = new Vector3(half, half, half);
+        Vector3[][] box = Meshes.box(middle.minus(corner), middle.plus(corner));
+        boolean[] turn = new boolean[box.length];
+        Arrays.fill(turn, (inward >> k & 1) == 1);
+        all = joined(all, Meshes.turned(box, turn));
+      }
+      MeshTopology topology = MeshTopology.of(Meshes.of(all));
+      assertTrue(topology.isClosed());
+      int wrong = 0;
+      for (int k = 0; k < 4; k++) {
+        MeshShell shell = topology.shells().get(k);
+        assertEquals(k == 1, shell.cavity());
+        boolean turned = (inward >> k & 1) == (k == 1 ? 0 : 1);
+        wrong += turned ? 12 : 0;
+        assertEquals(turned ? 12 : 0, shell.toTurn());
+        for (int t = 12 * k; t < 12 * k + 12; t++) {
+          assertEquals(turned, topology.isToTurn(t));
+        }
+      }
+      assertEquals(Math.min(wrong, 48 - wrong), topology.againstCount());
+      long counted = IntStream.range(0, 48).filter(topology::isAgainst).count();
+      assertEquals(topology.againstCount(), counted);
+    }
+  }
 }
