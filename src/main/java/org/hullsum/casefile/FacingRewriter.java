@@ -4,10 +4,7 @@ import java.io.IOException;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
-import java.util.ArrayList;
-import java.util.Comparator;
 import java.util.LinkedHashMap;
-import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
@@ -27,11 +24,8 @@ public final class FacingRewriter {
           "downward", "upward");
 
   private final SourceText source;
-  private final List<Edit> edits = new ArrayList<>();
+  private final TextEdits edits = new TextEdits();
   private final Map<String, String> refused = new LinkedHashMap<>();
-
-  /** A stretch of the text and what takes its place. */
-  private record Edit(int from, int to, String text) {}
 
   /**
    * What became of a file.
@@ -68,7 +62,7 @@ public final class FacingRewriter {
         YamlReader.read(source, new ProblemAccumulator())
             .orElseThrow(() -> new IllegalArgumentException(name + " is no case"));
     root.entry("patches").flatMap(e -> e.value().asMap()).ifPresent(m -> rewriter.look(m, patches));
-    return new Turned(mark + rewriter.edited(), rewriter.refused);
+    return new Turned(mark + rewriter.edits.appliedTo(source.text()), rewriter.refused);
   }
 
   private void look(YamlMap all, Set<String> patches) {
@@ -110,8 +104,7 @@ public final class FacingRewriter {
       if (word.start() < facing.key().end()) {
         return Optional.of("its facing is an alias; write the word out");
       }
-      edits.add(
-          new Edit(word.start(), word.end(), OPPOSITES.getOrDefault(word.text(), "reversed")));
+      edits.replace(word.start(), word.end(), OPPOSITES.getOrDefault(word.text(), "reversed"));
       return Optional.empty();
     }
     Optional<YamlList> along =
@@ -126,7 +119,7 @@ public final class FacingRewriter {
         return Optional.of("the components of `along` are not written out there");
       }
       YamlText text = component.get();
-      edits.add(new Edit(text.start(), text.end(), negated(text)));
+      edits.replace(text.start(), text.end(), negated(text));
     }
     return Optional.empty();
   }
@@ -154,24 +147,13 @@ public final class FacingRewriter {
     int lineStart = source.indexOf(line, 0);
     String before = source.text().substring(lineStart, key.start());
     if (key.inFlow()) {
-      edits.add(new Edit(key.start(), key.start(), "facing: reversed, "));
+      edits.replace(key.start(), key.start(), "facing: reversed, ");
     } else if (before.isBlank()) {
       String end = source.line(line).length() + 2 == source.lineLength(line) ? "\r\n" : "\n";
-      edits.add(new Edit(key.start(), key.start(), "facing: reversed" + end + before));
+      edits.replace(key.start(), key.start(), "facing: reversed" + end + before);
     } else {
       return Optional.of("there is no room for `facing` before its surface; write it by hand");
     }
     return Optional.empty();
-  }
-
-  private String edited() {
-    StringBuilder text = new StringBuilder();
-    int at = 0;
-    edits.sort(Comparator.comparingInt(Edit::from));
-    for (Edit edit : edits) {
-      text.append(source.text(), at, edit.from()).append(edit.text());
-      at = edit.to();
-    }
-    return text.append(source.text().substring(at)).toString();
   }
 }

@@ -8,6 +8,7 @@ import java.nio.file.StandardCopyOption;
 import java.time.Clock;
 import java.time.LocalDate;
 import java.time.ZoneOffset;
+import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
@@ -19,6 +20,7 @@ import org.hullsum.audit.PatchResult;
 import org.hullsum.audit.PatchResult.FoundFacing;
 import org.hullsum.audit.ProgressListener;
 import org.hullsum.casefile.FacingRewriter;
+import org.hullsum.casefile.MeshTurner;
 import org.hullsum.problem.FindingCode;
 import org.hullsum.problem.Problem;
 import org.hullsum.report.TextReport;
@@ -62,18 +64,27 @@ final class OrientRun {
     if (result.isUnreadable()) {
       return ExitCode.WRONG_INPUT;
     }
-    Set<String> inward = inward(result);
-    ExitCode left = whatIsLeft(result);
-    if (inward.isEmpty()) {
+    Set<String> mixed = mixed(result);
+    if (inward(result).isEmpty() && mixed.isEmpty()) {
       out.line(file + ": nothing to turn");
-      return left;
+      return whatIsLeft(result);
     }
     try {
-      return turn(inward).and(left);
+      return turn(result, mixed);
     } catch (IOException e) {
       err.line(file + ": can't be written: " + e.getMessage());
       return ExitCode.CANNOT_WRITE;
     }
+  }
+
+  /** The meshes some of whose triangles face against the others. */
+  private static Set<String> mixed(CaseResult result) {
+    Set<String> names = new LinkedHashSet<>();
+    result.findings().stream()
+        .filter(f -> f.code() == FindingCode.ORIENTATION_REVERSED)
+        .filter(f -> f.evidence().containsKey("triangles"))
+        .forEach(f -> f.on().ifPresent(names::add));
+    return names;
   }
 
   private static Set<String> inward(CaseResult result) {
@@ -105,39 +116,76 @@ final class OrientRun {
     return conflict ? ExitCode.IMBALANCED : code;
   }
 
-  private ExitCode turn(Set<String> inward) throws IOException {
+  /** First the triangles of meshes, then, of what is then inward, the facings. */
+  private ExitCode turn(CaseResult result, Set<String> mixed) throws IOException {
     Path original = Path.of(file).toRealPath();
     Path target = inPlace ? original : beside(original);
     if (!inPlace && Files.exists(target)) {
       err.line(target + " is there already; move it away, or ask for --in-place");
       return ExitCode.CANNOT_WRITE;
     }
-    FacingRewriter.Turned turned = FacingRewriter.turn(original, inward);
-    turned.refused().forEach((name, reason) -> out.line(file + ": " + name + ": " + reason));
-    Set<String> done = new LinkedHashSet<>(inward);
-    done.removeAll(turned.refused().keySet());
-    if (done.isEmpty()) {
-      return ExitCode.IMBALANCED;
+    MeshTurner.Plan meshes = MeshTurner.plan(original, mixed);
+    for (MeshTurner.Copy copy : meshes.copies()) {
+      if (Files.exists(copy.file())) {
+        err.line(copy.file() + " is there already; move it away");
+        return ExitCode.CANNOT_WRITE;
+      }
     }
     Path part = original.resolveSibling(original.getFileName() + ".part.yaml");
+    boolean done = false;
     try {
-      Files.copy(original, part, StandardCopyOption.COPY_ATTRIBUTES);
-      Files.write(part, turned.text().getBytes(StandardCharsets.UTF_8));
-      Optional<String> wrong = stillWrong(part, done);
-      if (wrong.isPresent()) {
-        err.line(file + ": " + wrong.get() + " would still face inward; nothing was written");
-        return ExitCode.FAULT;
+      for (MeshTurner.Copy copy : meshes.copies()) {
+        copy.write();
       }
-      Files.move(part, target, StandardCopyOption.ATOMIC_MOVE);
+      Files.copy(original, part, StandardCopyOption.COPY_ATTRIBUTES);
+      Files.write(part, meshes.text().getBytes(StandardCharsets.UTF_8));
+      CaseResult now = meshes.copies().isEmpty() ? result : again(part);
+      ExitCode code = write(part, target, inward(now), meshes).and(whatIsLeft(now));
+      done = code != ExitCode.FAULT;
+      return code;
     } finally {
       Files.deleteIfExists(part);
+      for (MeshTurner.Copy copy : done ? List.<MeshTurner.Copy>of() : meshes.copies()) {
+        Files.deleteIfExists(copy.file());
+      }
     }
-    out.line((inPlace ? file : besideName()) + ": turned " + String.join(", ", done));
-    return turned.refused().isEmpty() ? ExitCode.FINE : ExitCode.IMBALANCED;
+  }
+
+  private CaseResult again(Path part) {
+    return pipeline.run(part.toString(), settings).result();
+  }
+
+  private ExitCode write(Path part, Path target, Set<String> inward, MeshTurner.Plan meshes)
+      throws IOException {
+    FacingRewriter.Turned turned = FacingRewriter.turn(part, inward);
+    Map<String, String> refused = new LinkedHashMap<>(meshes.refused());
+    refused.putAll(turned.refused());
+    refused.forEach((name, reason) -> out.line(file + ": " + name + ": " + reason));
+    Set<String> done = new LinkedHashSet<>(inward);
+    done.removeAll(refused.keySet());
+    if (done.isEmpty() && meshes.copies().isEmpty()) {
+      return ExitCode.IMBALANCED;
+    }
+    Files.write(part, turned.text().getBytes(StandardCharsets.UTF_8));
+    Optional<String> wrong = stillWrong(part, done);
+    if (wrong.isPresent()) {
+      err.line(file + ": " + wrong.get() + " would still face inward; nothing was written");
+      return ExitCode.FAULT;
+    }
+    Files.move(part, target, StandardCopyOption.ATOMIC_MOVE);
+    for (MeshTurner.Copy copy : meshes.copies()) {
+      out.line(copy.file().getFileName() + ": turned " + copy.turned() + " triangles");
+    }
+    if (!done.isEmpty() || !meshes.copies().isEmpty()) {
+      out.line(
+          (inPlace ? file : besideName())
+              + (done.isEmpty() ? ": written" : ": turned " + String.join(", ", done)));
+    }
+    return refused.isEmpty() ? ExitCode.FINE : ExitCode.IMBALANCED;
   }
 
   private Optional<String> stillWrong(Path part, Set<String> done) {
-    Set<String> inward = inward(pipeline.run(part.toString(), settings).result());
+    Set<String> inward = inward(again(part));
     return done.stream().filter(inward::contains).findFirst();
   }
 
