@@ -7,6 +7,7 @@ import java.util.Map;
 import java.util.Optional;
 import org.hullsum.mesh.MeshShell;
 import org.hullsum.mesh.MeshTopology;
+import org.hullsum.mesh.MeshWeld;
 import org.hullsum.mesh.TriangleMesh;
 import org.hullsum.model.Patch;
 import org.hullsum.model.PatchSurface;
@@ -72,7 +73,41 @@ final class MeshFindings implements PatchSurface.Visitor<List<Finding>> {
               + "` has the corners of an earlier one; its flux is counted twice",
           Map.of("triangles", repeated));
     }
+    surface.weld().ifPresent(this::addWeld);
+    if (topology.degenerateCount() > 0) {
+      add(
+          FindingCode.MESH_DEGENERATE_FACES,
+          topology.degenerateCount()
+              + (topology.degenerateCount() == 1 ? " triangle of `" : " triangles of `")
+              + patch.name()
+              + "` with two corners in one vertex: no area, and left out",
+          Map.of("triangles", topology.degenerateCount()));
+    }
     return findings;
+  }
+
+  private void addWeld(MeshWeld weld) {
+    Map<String, Object> evidence = new LinkedHashMap<>();
+    evidence.put("vertices", weld.vertices());
+    evidence.put("farthest", scales.length() * weld.farthest());
+    evidence.put("triangles", weld.triangles());
+    String moved =
+        weld.vertices() == 0
+            ? ""
+            : ", the farthest moved by "
+                + Figures.text(scales.length() * weld.farthest(), scales.lengthUnit());
+    add(
+        FindingCode.MESH_WELDED,
+        weld.vertices()
+            + (weld.vertices() == 1 ? " vertex of `" : " vertices of `")
+            + patch.name()
+            + "` welded to others within "
+            + Figures.text(scales.length() * weld.length(), scales.lengthUnit())
+            + moved
+            + (weld.triangles() == 0
+                ? ""
+                : "; triangles that lost their area by it: " + weld.triangles()),
+        evidence);
   }
 
   private void addTurned(MeshTopology topology, long against) {

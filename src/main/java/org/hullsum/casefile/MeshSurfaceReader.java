@@ -10,6 +10,7 @@ import org.hullsum.mesh.MeshTopology;
 import org.hullsum.mesh.TriangleMesh;
 import org.hullsum.mesh.TriangleMeshBuilder;
 import org.hullsum.mesh.TriangleTree;
+import org.hullsum.mesh.VertexMerger;
 import org.hullsum.model.PatchSurface;
 import org.hullsum.problem.ProblemKind;
 import org.hullsum.units.Dimension;
@@ -17,6 +18,9 @@ import org.hullsum.units.WorkingUnits;
 
 /** Reads the surface {@code mesh}: a file of triangles, or one part of it. */
 final class MeshSurfaceReader {
+  /** Of the diagonal of the box around a mesh. */
+  private static final double MOST_WELDED = 0.01;
+
   private final FormulaReader formulas;
   private final ProblemAccumulator problems;
   private final DataFiles files;
@@ -35,10 +39,46 @@ final class MeshSurfaceReader {
     if (file.isEmpty() || scale.isEmpty() || (map.has("part") && part.isEmpty())) {
       return Optional.empty();
     }
-    return mesh(file.get(), name.get(), scale.getAsDouble())
+    Optional<TriangleMesh> whole = mesh(file.get(), name.get(), scale.getAsDouble());
+    OptionalDouble length = whole.map(mesh -> weldLength(map, mesh)).orElse(OptionalDouble.empty());
+    if (map.has("weld") && length.isEmpty()) {
+      return Optional.empty();
+    }
+    Optional<VertexMerger.Merged> merged =
+        length.isPresent()
+            ? whole.map(mesh -> VertexMerger.merge(mesh, length.getAsDouble()))
+            : Optional.empty();
+    return merged
+        .map(VertexMerger.Merged::mesh)
+        .or(() -> whole)
         .flatMap(mesh -> part.isPresent() ? part(mesh, part.get()) : Optional.of(mesh))
         .map(TriangleTree::of)
-        .map(tree -> new PatchSurface.Triangles(MeshTopology.of(tree, files.threads()), tree));
+        .map(
+            tree ->
+                new PatchSurface.Triangles(
+                    MeshTopology.of(tree, files.threads()),
+                    tree,
+                    merged.map(VertexMerger.Merged::weld)));
+  }
+
+  /** The length within which vertices are welded; refused where it is no small part of the mesh. */
+  private OptionalDouble weldLength(MapReader map, TriangleMesh mesh) {
+    OptionalDouble length =
+        map.get("weld")
+            .map(v -> formulas.number(v, Need.length("`weld`")))
+            .orElse(OptionalDouble.empty());
+    double most = MOST_WELDED * mesh.high().minus(mesh.low()).norm();
+    if (length.isPresent() && !(length.getAsDouble() > 0 && length.getAsDouble() <= most)) {
+      problems.add(
+          ProblemKind.WRONG_VALUE,
+          map.placeOf("weld"),
+          "`weld` is a length above 0 and at most a hundredth of the mesh's size, "
+              + most
+              + " in working units; here is "
+              + length.getAsDouble());
+      return OptionalDouble.empty();
+    }
+    return length;
   }
 
   /** From the file's unit of length to the working one, times {@code scale}. */

@@ -45,7 +45,7 @@ enum Section {
       "polygon rectangle disk cylinder cone sphere ellipsoid torus graph parametric revolution mesh"
           + " placed trim",
       ""),
-  MESH("`mesh`", "file part unit scale", ""),
+  MESH("`mesh`", "file part unit scale weld", ""),
   POLYGON("`polygon`", "points", ""),
   RECTANGLE("`rectangle`", "corner edges", ""),
   DISK("`disk`", "centre normal radius hole sector zero", ""),

@@ -115,6 +115,28 @@ public final class TriangleMesh {
     return runParts[found >= 0 ? found : -found - 2];
   }
 
+  /**
+   * The same triangles with other vertices for their corners, those that are left in their order.
+   *
+   * @param instead the vertex that takes the place of each, itself where it stays
+   */
+  TriangleMesh withVertices(int[] instead) {
+    int[] numbers = new int[vertices];
+    double[] kept = new double[3 * vertices];
+    int count = 0;
+    for (int v = 0; v < vertices; v++) {
+      if (instead[v] == v) {
+        System.arraycopy(coordinates, 3 * v, kept, 3 * count, 3);
+        numbers[v] = count++;
+      }
+    }
+    int[] renamed = new int[corners.length];
+    for (int h = 0; h < corners.length; h++) {
+      renamed[h] = numbers[instead[corners[h]]];
+    }
+    return new TriangleMesh(kept, count, renamed, runStarts, runParts, parts);
+  }
+
   /** The triangles of one part as a mesh of its own, with the vertices that they use. */
   public TriangleMesh only(int part) {
     TriangleMeshBuilder builder = new TriangleMeshBuilder();

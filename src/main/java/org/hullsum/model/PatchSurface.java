@@ -1,8 +1,10 @@
 package org.hullsum.model;
 
 import java.util.Objects;
+import java.util.Optional;
 import org.hullsum.geometry.Surface;
 import org.hullsum.mesh.MeshTopology;
+import org.hullsum.mesh.MeshWeld;
 import org.hullsum.mesh.TriangleMesh;
 import org.hullsum.mesh.TriangleTree;
 
@@ -38,11 +40,14 @@ public sealed interface PatchSurface {
    *
    * @param topology of the mesh, in working units of length
    * @param tree for lines through it
+   * @param weld what was welded within a length, where that was asked for
    */
-  record Triangles(MeshTopology topology, TriangleTree tree) implements PatchSurface {
+  record Triangles(MeshTopology topology, TriangleTree tree, Optional<MeshWeld> weld)
+      implements PatchSurface {
     public Triangles {
       Objects.requireNonNull(topology, "topology");
       Objects.requireNonNull(tree, "tree");
+      Objects.requireNonNull(weld, "weld");
     }
 
     public TriangleMesh mesh() {

@@ -21,6 +21,8 @@ public enum FindingCode {
   CLOSES_TOO_WELL(Severity.WARNING),
   TOO_COARSE_TO_TELL(Severity.WARNING),
   WAIVER_EXPIRED(Severity.WARNING),
+  MESH_WELDED(Severity.NOTE),
+  MESH_DEGENERATE_FACES(Severity.NOTE),
   FLUX_UNKNOWN(Severity.NOTE),
   NAME_UNUSED(Severity.NOTE),
   WAIVER_UNUSED(Severity.NOTE),

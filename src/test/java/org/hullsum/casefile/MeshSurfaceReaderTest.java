@@ -8,6 +8,7 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.List;
 import java.util.Map;
+import org.hullsum.mesh.MeshWeld;
 import org.hullsum.mesh.TriangleMesh;
 import org.hullsum.model.PatchSurface;
 import org.hullsum.problem.Problem;
@@ -110,5 +111,19 @@ class MeshSurfaceReaderTest {
   void filesOutsideTheFolderAreReadWhereAllowed() throws IOException {
     ReadOutcome outcome = read("mesh: {file: ../elsewhere.stl, unit: m}", List.of(folder));
     assertEquals(2, mesh(outcome).triangleCount());
+  }
+
+  @Test
+  void weldingIsDoneOnRequestAndOnlyWithinASmallLength() throws IOException {
+    ReadOutcome outcome = read("mesh: {file: plate.stl, unit: mm, weld: 1 mm}", List.of());
+    PatchSurface surface = outcome.found().orElseThrow().patches().get(0).surface().orElseThrow();
+    MeshWeld weld = ((PatchSurface.Triangles) surface).weld().orElseThrow();
+    assertEquals(new MeshWeld(0.001, 0, 0, 0), weld);
+    for (String wrong : List.of("0 mm", "-1 mm", "50 mm")) {
+      String problem = problem("mesh: {file: plate.stl, unit: mm, weld: " + wrong + "}");
+      assertTrue(problem.startsWith("case.yaml:7:55: `weld` is a length above 0"), problem);
+    }
+    assertTrue(
+        problem("mesh: {file: plate.stl, unit: mm, weld: 1 s}").startsWith("case.yaml:7:55"));
   }
 }
