@@ -9,6 +9,7 @@ import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.time.LocalDate;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import org.hullsum.casefile.CaseReader;
@@ -67,6 +68,22 @@ final class Audits {
     List<Volume> volumes =
         audited.volumes().stream()
             .map(v -> new Volume(v.name(), v.label(), List.of(), v.tolerances(), v.place()))
+            .toList();
+    return rebuilt(audited, volumes, audited.patches());
+  }
+
+  /** The case with other volumes, of nothing but their names. */
+  static Case withVolumes(Case audited, String... names) {
+    List<Volume> volumes =
+        Arrays.stream(names)
+            .map(
+                n ->
+                    new Volume(
+                        n,
+                        Optional.empty(),
+                        List.of(),
+                        audited.volumes().get(0).tolerances(),
+                        audited.volumes().get(0).place()))
             .toList();
     return rebuilt(audited, volumes, audited.patches());
   }

@@ -20,15 +20,15 @@ import org.hullsum.numeric.Vector3;
 /**
  * Closed surfaces whose patches are split at random, so that edges meet others of other lengths.
  */
-final class SewnAssemblies {
+public final class SewnAssemblies {
   private final Random random;
 
-  SewnAssemblies(Random random) {
+  public SewnAssemblies(Random random) {
     this.random = random;
   }
 
   /** One of any kind; moved at random where it has no trim, which stays where it is. */
-  Assembly next() {
+  public Assembly next() {
     Assembly plain =
         switch (random.nextInt(9)) {
           case 0 -> box();
