@@ -53,7 +53,7 @@ public final class TriangleTree {
   private void build(int node, int from, int to, int level) {
     int at = 6 * node;
     if (level < depth) {
-      int middle = (from + to) >>> 1;
+      int middle = middle(from, to);
       build(2 * node, from, middle, level + 1);
       build(2 * node + 1, middle, to, level + 1);
       for (int k = 0; k < 3; k++) {
@@ -83,6 +83,60 @@ public final class TriangleTree {
 
   public TriangleMesh mesh() {
     return mesh;
+  }
+
+  /** The triangles in the order of the tree: each node's follow one another. Not to be changed. */
+  int[] order() {
+    return order;
+  }
+
+  /** The level of the lowest nodes, that of the root being 0. */
+  int depth() {
+    return depth;
+  }
+
+  /** Where the triangles of a node are halved, the first half going to the node 2 · node. */
+  static int middle(int from, int to) {
+    return (from + to) >>> 1;
+  }
+
+  /** Distance of a point from the nearest triangle; infinite where there is none. */
+  public double distance(Vector3 point) {
+    return distance(1, 0, order.length, 0, point, Double.POSITIVE_INFINITY);
+  }
+
+  /** The smaller of the nearest distance below a node and the one known. */
+  private double distance(int node, int from, int to, int level, Vector3 point, double known) {
+    if (distanceToBox(6 * node, point) >= known) {
+      return known;
+    }
+    double nearest = known;
+    if (level == depth) {
+      for (int i = from; i < to; i++) {
+        nearest = Math.min(nearest, TriangleDistance.of(mesh, order[i], point));
+      }
+      return nearest;
+    }
+    int middle = middle(from, to);
+    boolean first = distanceToBox(12 * node, point) <= distanceToBox(12 * node + 6, point);
+    for (int half = 0; half < 2; half++) {
+      boolean before = (half == 0) == first;
+      nearest =
+          before
+              ? distance(2 * node, from, middle, level + 1, point, nearest)
+              : distance(2 * node + 1, middle, to, level + 1, point, nearest);
+    }
+    return nearest;
+  }
+
+  private double distanceToBox(int at, Vector3 point) {
+    double sum = 0;
+    for (int k = 0; k < 3; k++) {
+      double p = point.component(k);
+      double out = Math.max(0, Math.max(boxes[at + k] - p, p - boxes[at + 3 + k]));
+      sum += out * out;
+    }
+    return Math.sqrt(sum);
   }
 
   /** The diagonal of the box around all. */
@@ -155,7 +209,7 @@ public final class TriangleTree {
         return;
       }
       if (level < depth) {
-        int middle = (from + to) >>> 1;
+        int middle = middle(from, to);
         visit(2 * node, from, middle, level + 1);
         visit(2 * node + 1, middle, to, level + 1);
         return;
