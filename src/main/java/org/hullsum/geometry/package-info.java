@@ -16,7 +16,8 @@
  *       and tangents over arrays of points, boxes proved to contain them.
  *   <li>{@link org.hullsum.geometry.LineCrossings}: where a line passes through, with proof or with
  *       a doubt; {@link org.hullsum.geometry.SurfaceSamples}: points to start lines from.
- *   <li>{@link org.hullsum.geometry.BoundaryCurves}: rims and the curves of trims as polylines.
+ *   <li>{@link org.hullsum.geometry.BoundaryCurves}: rims and the curves of trims as polylines;
+ *       {@link org.hullsum.geometry.SurfaceTriangles}: triangles close to a surface.
  * </ul>
  *
  * <p>A side of a chart's square is a rim, or glued to another side, or drawn to a point (a pole, an
