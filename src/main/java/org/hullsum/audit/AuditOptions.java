@@ -4,15 +4,19 @@ import java.time.LocalDate;
 import java.util.Objects;
 
 /**
- * How a case is audited; none of it but {@code digits} and {@code today} can change a result.
+ * How a case is audited; none of it but {@code digits}, {@code today} and {@code secondOpinion} can
+ * change a result.
  *
  * @param digits integrals are asked for to 10^−digits of ∬|F·n| dS of the patch, or of ∭|g|, 1 to
  *     {@value #MOST_DIGITS}
  * @param threads at least 1
  * @param today the day on which waivers are valid or expired
  * @param progress told of every finished piece of work
+ * @param secondOpinion whether winding numbers are asked of every facing, not only where nothing
+ *     else tells
  */
-public record AuditOptions(int digits, int threads, LocalDate today, ProgressListener progress) {
+public record AuditOptions(
+    int digits, int threads, LocalDate today, ProgressListener progress, boolean secondOpinion) {
   /** The accuracy unless asked for. */
   public static final int USUAL_DIGITS = 8;
 
@@ -32,6 +36,6 @@ public record AuditOptions(int digits, int threads, LocalDate today, ProgressLis
 
   /** The usual accuracy on one thread, silently. */
   public static AuditOptions usual(LocalDate today) {
-    return new AuditOptions(USUAL_DIGITS, 1, today, ProgressListener.SILENT);
+    return new AuditOptions(USUAL_DIGITS, 1, today, ProgressListener.SILENT, false);
   }
 }

@@ -10,6 +10,7 @@ import java.util.OptionalDouble;
 import java.util.Set;
 import java.util.function.Supplier;
 import org.hullsum.closure.VolumeFacings;
+import org.hullsum.closure.WindingOpinion;
 import org.hullsum.flux.InputSensitivity;
 import org.hullsum.model.Case;
 import org.hullsum.model.Envelope;
@@ -52,7 +53,9 @@ final class CaseAudit {
     Supplier<List<LineInspection.Seen>> seen = workers.begin(lines::look);
     List<PatchAudit> drawnPatches = integratePatches();
     List<SurfaceAudit> surfaces = inspectSurfaces(drawnPatches, seen.get());
-    FacingAudit facings = new FacingAudit(drawnPatches, surfaces);
+    Map<String, WindingOpinion> opinions =
+        new WindingInspection(options.secondOpinion(), inputs.values(), workers).look(surfaces);
+    FacingAudit facings = new FacingAudit(drawnPatches, surfaces, opinions);
     List<PatchAudit> patches = drawnPatches.stream().map(facings::resolved).toList();
     List<SingularityAudit> onPatches = inspectPatches(patches);
     List<SingularityAudit> inVolumes = inspectVolumes(surfaces);
@@ -200,7 +203,7 @@ final class CaseAudit {
           judge);
     }
     findings.addAll(facings.findings(patches));
-    surfaces.forEach(findings::addSurface);
+    surfaces.forEach(surface -> findings.addSurface(surface, facings.byWindingAlone()));
     for (int v = 0; v < interiors.size(); v++) {
       findings.addInterior(interiors.get(v), audited.volumes().get(v), options.digits());
     }

@@ -7,6 +7,7 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
+import java.util.Set;
 import java.util.stream.Collectors;
 import org.hullsum.closure.FoundFacing.Side;
 import org.hullsum.closure.Gap;
@@ -157,7 +158,12 @@ final class CaseFindings {
     }
   }
 
-  void addSurface(SurfaceAudit surface) {
+  /**
+   * What is wrong with a surface.
+   *
+   * @param told patches of which the facing is told by other findings, so that none is offered
+   */
+  void addSurface(SurfaceAudit surface, Set<String> told) {
     Volume volume = surface.volume();
     if (!surface.bounded()) {
       add(
@@ -176,7 +182,9 @@ final class CaseFindings {
     surface.sewn().shells().stream()
         .filter(shell -> !shell.consistent())
         .forEach(shell -> addTwisted(surface, shell));
-    surface.offered().forEach(name -> addOffered(surface, name));
+    surface.offered().stream()
+        .filter(name -> !told.contains(name))
+        .forEach(name -> addOffered(surface, name));
     if (!surface.gaps().isEmpty()) {
       addOpen(surface);
     } else if (surface.bare().isEmpty() && !surface.overlaps()) {

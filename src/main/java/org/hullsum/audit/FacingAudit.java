@@ -9,6 +9,7 @@ import java.util.Optional;
 import java.util.Set;
 import org.hullsum.audit.PatchResult.FoundFacing;
 import org.hullsum.closure.FoundFacing.Side;
+import org.hullsum.closure.WindingOpinion;
 import org.hullsum.problem.Finding;
 import org.hullsum.problem.FindingCode;
 import org.hullsum.problem.Severity;
@@ -23,6 +24,7 @@ import org.hullsum.problem.Severity;
  */
 final class FacingAudit {
   private final Map<String, SurfaceAudit> surfaces = new LinkedHashMap<>();
+  private final Map<String, WindingOpinion> opinions;
   private final Map<String, Seen> seen = new LinkedHashMap<>();
 
   /** The signs, against the construction normal, of patches that are to face as found. */
@@ -33,19 +35,28 @@ final class FacingAudit {
    *
    * @param found empty where nothing could be looked for
    * @param leaning the answer towards which an undetermined one leans
-   * @param reason why it is undetermined
+   * @param reason why it is undetermined, or on what it rests
    * @param conflict whether the two sides contradict each other
+   * @param windingAlone whether nothing but winding numbers tells it
    */
   record Seen(
       Optional<FoundFacing> found,
       Optional<FoundFacing> leaning,
       Optional<String> reason,
-      boolean conflict) {
+      boolean conflict,
+      boolean windingAlone) {
     static final Seen NOTHING =
-        new Seen(Optional.empty(), Optional.empty(), Optional.empty(), false);
+        new Seen(Optional.empty(), Optional.empty(), Optional.empty(), false, false);
   }
 
-  FacingAudit(List<PatchAudit> patches, List<SurfaceAudit> audited) {
+  /**
+   * Looks at every patch.
+   *
+   * @param opinions of winding numbers, by the volume, where there are any
+   */
+  FacingAudit(
+      List<PatchAudit> patches, List<SurfaceAudit> audited, Map<String, WindingOpinion> opinions) {
+    this.opinions = opinions;
     audited.forEach(s -> surfaces.put(s.volume().name(), s));
     patches.forEach(p -> seen.put(p.name(), look(p)));
   }
@@ -96,7 +107,8 @@ final class FacingAudit {
           Optional.of(FoundFacing.UNDETERMINED),
           Optional.empty(),
           Optional.of("the volumes on its two sides contradict each other"),
-          true);
+          true,
+          false);
     }
     Optional<Side> side =
         behind
@@ -109,7 +121,11 @@ final class FacingAudit {
     }
     if (side.isPresent()) {
       return new Seen(
-          Optional.of(declared(side.get(), patch)), Optional.empty(), Optional.empty(), false);
+          Optional.of(declared(side.get(), patch)),
+          Optional.empty(),
+          Optional.empty(),
+          false,
+          false);
     }
     Optional<Side> leaning =
         behind
@@ -117,11 +133,54 @@ final class FacingAudit {
             .or(() -> ahead.flatMap(f -> f.leaning().map(Side::opposite)));
     String reason =
         behind.or(() -> ahead).flatMap(f -> f.reason()).map(r -> r.words()).orElse("unknown");
-    return undetermined(leaning.map(s -> declared(s, patch)), reason);
+    // Lines that lean the other way leave nothing clear.
+    return byWinding(patch)
+        .filter(s -> leaning.isEmpty() || leaning.get() == s)
+        .map(s -> alone(declared(s, patch), reason))
+        .orElseGet(() -> undetermined(leaning.map(s -> declared(s, patch)), reason));
+  }
+
+  private static Seen alone(FoundFacing facing, String reason) {
+    return new Seen(
+        Optional.of(facing),
+        Optional.empty(),
+        Optional.of("rests on winding numbers alone: " + reason),
+        false,
+        true);
   }
 
   private static Seen undetermined(Optional<FoundFacing> leaning, String reason) {
-    return new Seen(Optional.of(FoundFacing.UNDETERMINED), leaning, Optional.of(reason), false);
+    return new Seen(
+        Optional.of(FoundFacing.UNDETERMINED), leaning, Optional.of(reason), false, false);
+  }
+
+  /** The side, seen from the volume that is left; empty where the two volumes disagree. */
+  private Optional<Side> byWinding(PatchAudit patch) {
+    Optional<Side> behind = byWinding(patch.patch().leaves(), patch);
+    Optional<Side> ahead = byWinding(patch.patch().enters(), patch).map(Side::opposite);
+    boolean differ = behind.isPresent() && ahead.isPresent() && !behind.equals(ahead);
+    return differ ? Optional.empty() : behind.or(() -> ahead);
+  }
+
+  private Optional<Side> byWinding(String volume, PatchAudit patch) {
+    int place = surfaces.containsKey(volume) ? surfaces.get(volume).patches().indexOf(patch) : -1;
+    return place < 0
+        ? Optional.empty()
+        : Optional.ofNullable(opinions.get(volume))
+            .map(opinion -> opinion.votes().get(place).side())
+            .filter(s -> s != Side.UNDETERMINED);
+  }
+
+  /** Patches of which nothing but winding numbers tells the facing. */
+  Set<String> byWindingAlone() {
+    Set<String> names = new LinkedHashSet<>();
+    seen.forEach(
+        (name, s) -> {
+          if (s.windingAlone()) {
+            names.add(name);
+          }
+        });
+    return names;
   }
 
   private Optional<org.hullsum.closure.FoundFacing> in(String volume, PatchAudit patch) {
@@ -132,7 +191,10 @@ final class FacingAudit {
     return constructionNormal.sign() * patch.sign() > 0 ? FoundFacing.OUTWARD : FoundFacing.INWARD;
   }
 
-  /** {@code orientation-reversed} and {@code orientation-conflict}, in the order of the case. */
+  /**
+   * {@code orientation-reversed} and {@code orientation-conflict}, in the order of the case, then
+   * {@code second-opinion-differs}.
+   */
   List<Finding> findings(List<PatchAudit> patches) {
     List<Finding> findings = new ArrayList<>();
     for (PatchAudit patch : patches) {
@@ -140,9 +202,10 @@ final class FacingAudit {
       if (s.conflict()) {
         findings.add(conflict(patch));
       } else if (s.found().filter(FoundFacing.INWARD::equals).isPresent()) {
-        findings.add(reversed(patch));
+        findings.add(reversed(patch, s.windingAlone()));
       }
     }
+    surfaces.values().forEach(s -> SecondOpinionFindings.of(s, opinions).ifPresent(findings::add));
     return findings;
   }
 
@@ -163,7 +226,7 @@ final class FacingAudit {
         Map.of());
   }
 
-  private static Finding reversed(PatchAudit patch) {
+  private static Finding reversed(PatchAudit patch, boolean windingAlone) {
     boolean turns = patch.followsNormal();
     String leaves = patch.patch().leaves();
     boolean outside = Explainer.isOutside(leaves);
@@ -182,16 +245,22 @@ final class FacingAudit {
                 ? "; its flux does not follow the normal, so no figure changes"
                 : patch.passesNothing()
                     ? "; nothing flows through it, so no figure changes"
-                    : "; its flux is counted with the wrong sign");
+                    : "; its flux is counted with the wrong sign")
+            + (windingAlone
+                ? ". This rests on winding numbers alone, since neither seams nor lines tell"
+                : "");
     Map<String, Object> evidence = new LinkedHashMap<>();
     evidence.put("declared", patch.patch().facing().text());
     evidence.put("found", FoundFacing.INWARD.word());
+    if (windingAlone) {
+      evidence.put("by", "winding-numbers");
+    }
     return Finding.of(
             FindingCode.ORIENTATION_REVERSED,
             message,
             patch.name(),
             Optional.of(patch.patch().facingPlace()),
             evidence)
-        .weighing(turns ? Severity.ERROR : Severity.WARNING);
+        .weighing(turns && !windingAlone ? Severity.ERROR : Severity.WARNING);
   }
 }

@@ -18,7 +18,7 @@ import org.hullsum.numeric.Vector3;
  * @param fluxes at each instant
  * @param declaredFacing as the case has it
  * @param foundFacing empty without a surface or without a volume
- * @param facingReason why the facing is undetermined
+ * @param facingReason why the facing is undetermined, or that it rests on winding numbers alone
  */
 public record PatchResult(
     String name,

@@ -68,6 +68,8 @@ final class AuditOptionsReader {
     spec.addOption(
         repeated("--allow-outside", "DIR", "Lets data files lie in DIR, outside the case's folder.")
             .build());
+    spec.addOption(
+        flag("--second-opinion", "Asks winding numbers, too, which way every patch faces."));
     spec.addOption(flag("--no-progress", "Prints no progress line."));
     spec.addOption(flag("--quiet", "Prints one line per balance instead of the report."));
     return spec;
@@ -120,7 +122,8 @@ final class AuditOptionsReader {
         threads(),
         digits(),
         !parsed.hasMatchedOption("--no-progress"),
-        parsed.hasMatchedOption("--quiet"));
+        parsed.hasMatchedOption("--quiet"),
+        parsed.hasMatchedOption("--second-opinion"));
   }
 
   /** A document is not written over a case that is to be read. */

@@ -18,6 +18,7 @@ import org.hullsum.audit.AuditOptions;
  * @param digits requested accuracy
  * @param progress whether a progress line may be shown
  * @param quiet one line per balance instead of the report
+ * @param secondOpinion whether winding numbers are asked of every facing
  */
 record AuditRequest(
     List<String> cases,
@@ -28,7 +29,8 @@ record AuditRequest(
     int threads,
     int digits,
     boolean progress,
-    boolean quiet) {
+    boolean quiet,
+    boolean secondOpinion) {
   static final String STANDARD_OUTPUT = "-";
 
   AuditRequest {
@@ -48,6 +50,7 @@ record AuditRequest(
         Runtime.getRuntime().availableProcessors(),
         AuditOptions.USUAL_DIGITS,
         true,
+        false,
         false);
   }
 

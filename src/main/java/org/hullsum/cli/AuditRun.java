@@ -101,7 +101,8 @@ final class AuditRun {
         request.digits(),
         threads,
         LocalDate.ofInstant(now, ZoneOffset.UTC),
-        progress);
+        progress,
+        request.secondOpinion());
   }
 
   private Optional<Outcome> await(String file, Future<Outcome> future) {

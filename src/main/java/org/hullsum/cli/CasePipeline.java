@@ -20,6 +20,7 @@ interface CasePipeline {
    * @param threads at least 1
    * @param today the day for waivers
    * @param progress told of finished pieces of work
+   * @param secondOpinion whether winding numbers are asked of every facing
    */
   record Settings(
       Map<String, String> parameters,
@@ -27,7 +28,8 @@ interface CasePipeline {
       int digits,
       int threads,
       LocalDate today,
-      ProgressListener progress) {
+      ProgressListener progress,
+      boolean secondOpinion) {
     public Settings {
       parameters = Map.copyOf(parameters);
       allowedFolders = List.copyOf(allowedFolders);

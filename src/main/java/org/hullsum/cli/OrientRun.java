@@ -53,7 +53,8 @@ final class OrientRun {
             AuditOptions.USUAL_DIGITS,
             Runtime.getRuntime().availableProcessors(),
             LocalDate.ofInstant(clock.instant(), ZoneOffset.UTC),
-            ProgressListener.SILENT);
+            ProgressListener.SILENT,
+            false);
   }
 
   ExitCode run() {

@@ -42,7 +42,11 @@ final class ReadAndAudit implements CasePipeline {
         Auditor.audit(
             found,
             new AuditOptions(
-                settings.digits(), settings.threads(), settings.today(), settings.progress()));
+                settings.digits(),
+                settings.threads(),
+                settings.today(),
+                settings.progress(),
+                settings.secondOpinion()));
     return new Outcome(result, found.sources());
   }
 

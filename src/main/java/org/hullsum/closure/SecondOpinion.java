@@ -48,6 +48,19 @@ public final class SecondOpinion {
   }
 
   /**
+   * The opinion where nothing is known of how the patches hang together.
+   *
+   * @param found as in {@link #of(List, int[])}
+   */
+  public WindingOpinion of(int[] found) {
+    List<Shell> apart = new ArrayList<>();
+    for (int k = 0; k < patches; k++) {
+      apart.add(new Shell(List.of(k), List.of(1), true, false, false));
+    }
+    return of(apart, found);
+  }
+
+  /**
    * The opinion.
    *
    * @param shells groups of patches whose facings relative to one another are known, each patch in

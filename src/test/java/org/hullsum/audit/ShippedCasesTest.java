@@ -187,7 +187,7 @@ class ShippedCasesTest {
     for (int threads : new int[] {2, 3}) {
       CaseResult more =
           Auditor.audit(
-              audited, new AuditOptions(8, threads, Audits.TODAY, ProgressListener.SILENT));
+              audited, new AuditOptions(8, threads, Audits.TODAY, ProgressListener.SILENT, false));
       assertEquals(one.balances(), more.balances());
       assertEquals(one.patches(), more.patches());
       assertEquals(one.surfaces(), more.surfaces());

@@ -14,7 +14,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 
 class WorkersTest {
   private static Workers workers(int threads, ProgressListener progress) {
-    return new Workers(new AuditOptions(8, threads, LocalDate.EPOCH, progress));
+    return new Workers(new AuditOptions(8, threads, LocalDate.EPOCH, progress, false));
   }
 
   @ParameterizedTest
@@ -57,9 +57,9 @@ class WorkersTest {
   void optionsOutOfRangeAreRefused() {
     assertThrows(
         IllegalArgumentException.class,
-        () -> new AuditOptions(0, 1, LocalDate.EPOCH, ProgressListener.SILENT));
+        () -> new AuditOptions(0, 1, LocalDate.EPOCH, ProgressListener.SILENT, false));
     assertThrows(
         IllegalArgumentException.class,
-        () -> new AuditOptions(8, 0, LocalDate.EPOCH, ProgressListener.SILENT));
+        () -> new AuditOptions(8, 0, LocalDate.EPOCH, ProgressListener.SILENT, false));
   }
 }

@@ -187,7 +187,6 @@ class ProgramTest {
         "reconcile x.yaml",
         "desk x.yaml",
         "audit x.yaml --html f",
-        "audit x.yaml --second-opinion",
         "audit x.yaml --digits 0",
         "audit x.yaml --digits 15",
         "audit x.yaml --digits many",
