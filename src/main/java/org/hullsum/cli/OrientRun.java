@@ -98,6 +98,13 @@ final class OrientRun {
     return names;
   }
 
+  /** Of a facing that not everything tells. */
+  private void sayWhy(PatchResult patch) {
+    patch
+        .facingReason()
+        .ifPresent(reason -> out.line(file + ": the facing of " + patch.name() + " " + reason));
+  }
+
   /** Tells the patches of which the right facing is not known. */
   private ExitCode whatIsLeft(CaseResult result) {
     ExitCode code = ExitCode.FINE;
@@ -141,7 +148,9 @@ final class OrientRun {
       Files.copy(original, part, StandardCopyOption.COPY_ATTRIBUTES);
       Files.write(part, meshes.text().getBytes(StandardCharsets.UTF_8));
       CaseResult now = meshes.copies().isEmpty() ? result : again(part);
-      ExitCode code = write(part, target, inward(now), meshes).and(whatIsLeft(now));
+      Set<String> inward = inward(now);
+      now.patches().stream().filter(p -> inward.contains(p.name())).forEach(this::sayWhy);
+      ExitCode code = write(part, target, inward, meshes).and(whatIsLeft(now));
       done = code != ExitCode.FAULT;
       return code;
     } finally {

@@ -28,8 +28,8 @@ public final class SecondOpinion {
   /** Share of a patch at a point from which the point says something of it. */
   private static final double HEARD = 0.1;
 
-  /** Largest misfit that is a fit. */
-  private static final double FITS = 0.2;
+  /** Largest misfit that is a fit: half way to where either whole number is as near. */
+  private static final double FITS = 0.25;
 
   /** How much worse the other facing must fit. */
   private static final double CLEARLY = 0.2;
