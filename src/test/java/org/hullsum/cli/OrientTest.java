@@ -8,6 +8,7 @@ import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Random;
 import java.util.stream.IntStream;
@@ -48,6 +49,32 @@ class OrientTest {
 
   private static ProgramRun run(String... arguments) {
     return ProgramRun.of(new ReadAndAudit(), arguments);
+  }
+
+  @Test
+  void facingBesideGapsIsTurnedWithALineThatSaysOnWhatItRests() throws IOException {
+    StringBuilder text = new StringBuilder("format: hullsum-case/1\nunits: none\n");
+    text.append("fields:\n  flow: {vector: [x, y, z]}\npatches:\n");
+    for (int axis = 0; axis < 3; axis++) {
+      for (int side : new int[] {-1, 1}) {
+        // Plates of a cube of side 2, each 0.1 short of its edges.
+        double[][] rows = {{-0.9, -0.9, -0.9}, new double[3], new double[3]};
+        rows[0][axis] = side;
+        rows[1][(axis + (side > 0 ? 1 : 2)) % 3] = 1.8;
+        rows[2][(axis + (side > 0 ? 2 : 1)) % 3] = 1.8;
+        text.append("  plate-").append(axis).append(side > 0 ? "-high" : "-low").append(":\n");
+        text.append(side > 0 && axis == 1 ? "    facing: reversed\n" : "");
+        text.append("    surface: {rectangle: {corner: ").append(Arrays.toString(rows[0]));
+        text.append(", edges: [").append(Arrays.toString(rows[1])).append(", ");
+        text.append(Arrays.toString(rows[2])).append("]}}\n    flux: {field: flow}\n");
+      }
+    }
+    Path file = Files.writeString(folder.resolve("plates.yaml"), text);
+    ProgramRun run = run("orient", file.toString());
+    assertEquals(0, run.status(), run.out() + run.err());
+    assertTrue(
+        run.out().contains("plate-1-high rests on winding numbers alone"), run.out() + run.err());
+    assertTrue(run.out().contains("turned plate-1-high"), run.out());
   }
 
   static IntStream seeds() {

@@ -171,9 +171,10 @@ class WindingNumberTest {
         sum += visited;
       }
     }
-    // 65,535 clusters; near the tube's inner side much of it is near.
-    assertTrue(most < 6_553, most + " nodes");
-    assertTrue(sum < 300 * 2_000, sum / 300 + " nodes on average");
+    // Of 65,535 clusters. Near the tube's inner side much of it is near, and halves along a
+    // Morton curve may lie in two places: medians take half as many.
+    assertTrue(most < 13_107, most + " nodes");
+    assertTrue(sum < 300 * 3_276, sum / 300 + " nodes on average");
   }
 
   @Test
