@@ -47,6 +47,11 @@ final class FacingAudit {
       boolean windingAlone) {
     static final Seen NOTHING =
         new Seen(Optional.empty(), Optional.empty(), Optional.empty(), false, false);
+
+    /** Where lines or seams tell. */
+    static Seen told(FoundFacing found) {
+      return new Seen(Optional.of(found), Optional.empty(), Optional.empty(), false, false);
+    }
   }
 
   /**
@@ -117,15 +122,10 @@ final class FacingAudit {
             .or(() -> ahead.map(f -> f.side().opposite()).filter(s -> s != Side.UNDETERMINED));
     if (side.isPresent() && patch.facesAsFound()) {
       turned.put(patch.name(), side.get().sign());
-      return new Seen(Optional.of(FoundFacing.OUTWARD), Optional.empty(), Optional.empty(), false);
+      return Seen.told(FoundFacing.OUTWARD);
     }
     if (side.isPresent()) {
-      return new Seen(
-          Optional.of(declared(side.get(), patch)),
-          Optional.empty(),
-          Optional.empty(),
-          false,
-          false);
+      return Seen.told(declared(side.get(), patch));
     }
     Optional<Side> leaning =
         behind
@@ -136,8 +136,16 @@ final class FacingAudit {
     // Lines that lean the other way leave nothing clear.
     return byWinding(patch)
         .filter(s -> leaning.isEmpty() || leaning.get() == s)
-        .map(s -> alone(declared(s, patch), reason))
+        .map(s -> alone(s, patch, reason))
         .orElseGet(() -> undetermined(leaning.map(s -> declared(s, patch)), reason));
+  }
+
+  private Seen alone(Side side, PatchAudit patch, String reason) {
+    if (patch.facesAsFound()) {
+      turned.put(patch.name(), side.sign());
+      return alone(FoundFacing.OUTWARD, reason);
+    }
+    return alone(declared(side, patch), reason);
   }
 
   private static Seen alone(FoundFacing facing, String reason) {
