@@ -7,6 +7,7 @@ import java.util.OptionalDouble;
 import org.hullsum.mesh.MeshFault;
 import org.hullsum.mesh.MeshFile;
 import org.hullsum.mesh.MeshTopology;
+import org.hullsum.mesh.MeshWeld;
 import org.hullsum.mesh.TriangleMesh;
 import org.hullsum.mesh.TriangleMeshBuilder;
 import org.hullsum.mesh.TriangleTree;
@@ -53,12 +54,12 @@ final class MeshSurfaceReader {
         .or(() -> whole)
         .flatMap(mesh -> part.isPresent() ? part(mesh, part.get()) : Optional.of(mesh))
         .map(TriangleTree::of)
-        .map(
-            tree ->
-                new PatchSurface.Triangles(
-                    MeshTopology.of(tree, files.threads()),
-                    tree,
-                    merged.map(VertexMerger.Merged::weld)));
+        .map(tree -> triangles(tree, merged.map(VertexMerger.Merged::weld)));
+  }
+
+  private PatchSurface triangles(TriangleTree tree, Optional<MeshWeld> weld) {
+    MeshTopology topology = MeshTopology.of(tree, files.threads());
+    return new PatchSurface.Triangles(topology, tree.agreed(topology), weld);
   }
 
   /** The length within which vertices are welded; refused where it is no small part of the mesh. */

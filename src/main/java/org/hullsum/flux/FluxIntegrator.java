@@ -116,8 +116,8 @@ public final class FluxIntegrator {
     @Override
     public PreparedFlux field(FluxStatement.Field statement) {
       VectorExpression field = statement.field().cartesian();
-      if (surface().mesh().isPresent()) {
-        return MeshFlux.of(surface().mesh().get(), field, inputs, relative);
+      if (surface().drawnMesh().isPresent()) {
+        return MeshFlux.of(surface().drawnMesh().get(), field, inputs, relative);
       }
       SurfaceFlux flux =
           new SurfaceFlux(
@@ -140,8 +140,8 @@ public final class FluxIntegrator {
     }
 
     private PreparedFlux along(Expression density, FluxBasis basis) {
-      if (surface().mesh().isPresent()) {
-        return MeshFlux.along(surface().mesh().get(), density, basis, inputs, relative);
+      if (surface().drawnMesh().isPresent()) {
+        return MeshFlux.along(surface().drawnMesh().get(), density, basis, inputs, relative);
       }
       SurfaceFlux flux =
           new SurfaceFlux(

@@ -17,18 +17,24 @@ public final class PulledBackSurface {
   private final Optional<Surface> surface;
   private final List<PulledBackChart> charts;
   private final Optional<TriangleTree> tree;
+  private final Optional<TriangleMesh> drawn;
 
   private PulledBackSurface(
-      Optional<Surface> surface, List<PulledBackChart> charts, Optional<TriangleTree> tree) {
+      Optional<Surface> surface,
+      List<PulledBackChart> charts,
+      Optional<TriangleTree> tree,
+      Optional<TriangleMesh> drawn) {
     this.surface = surface;
     this.charts = List.copyOf(charts);
     this.tree = tree;
+    this.drawn = drawn;
   }
 
   public static PulledBackSurface of(Surface surface) {
     return new PulledBackSurface(
         Optional.of(surface),
         surface.charts().stream().map(c -> PulledBackChart.of(c, surface.trim())).toList(),
+        Optional.empty(),
         Optional.empty());
   }
 
@@ -43,14 +49,18 @@ public final class PulledBackSurface {
           @Override
           public PulledBackSurface triangles(PatchSurface.Triangles triangles) {
             return new PulledBackSurface(
-                Optional.empty(), List.of(), Optional.of(triangles.tree()));
+                Optional.empty(),
+                List.of(),
+                Optional.of(triangles.tree()),
+                Optional.of(triangles.mesh()));
           }
         });
   }
 
   /** Of triangles. */
   public static PulledBackSurface of(TriangleMesh mesh) {
-    return new PulledBackSurface(Optional.empty(), List.of(), Optional.of(TriangleTree.of(mesh)));
+    return new PulledBackSurface(
+        Optional.empty(), List.of(), Optional.of(TriangleTree.of(mesh)), Optional.of(mesh));
   }
 
   /** The formulas; empty where it is of triangles. */
@@ -63,11 +73,17 @@ public final class PulledBackSurface {
     return charts;
   }
 
-  /** The triangles, for lines through them; empty where it is of formulas. */
+  /** The same triangles for lines through them; empty where it is of formulas. */
   Optional<TriangleTree> tree() {
     return tree;
   }
 
+  /** The triangles as drawn, whatever they face: what a flux passes. */
+  Optional<TriangleMesh> drawnMesh() {
+    return drawn;
+  }
+
+  /** The triangles, those turned that face against the others: what bounds a region. */
   Optional<TriangleMesh> mesh() {
     return tree.map(TriangleTree::mesh);
   }

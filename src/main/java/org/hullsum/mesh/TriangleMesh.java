@@ -2,6 +2,7 @@ package org.hullsum.mesh;
 
 import java.util.Arrays;
 import java.util.List;
+import java.util.function.IntPredicate;
 import org.hullsum.numeric.Vector3;
 
 /**
@@ -135,6 +136,18 @@ public final class TriangleMesh {
       renamed[h] = numbers[instead[corners[h]]];
     }
     return new TriangleMesh(kept, count, renamed, runStarts, runParts, parts);
+  }
+
+  /** The same with the corners of some triangles the other way round. */
+  TriangleMesh turned(IntPredicate triangles) {
+    int[] changed = corners.clone();
+    for (int t = 0; t < triangleCount(); t++) {
+      if (triangles.test(t)) {
+        changed[3 * t + 1] = corners[3 * t + 2];
+        changed[3 * t + 2] = corners[3 * t + 1];
+      }
+    }
+    return new TriangleMesh(coordinates, vertices, changed, runStarts, runParts, parts);
   }
 
   /** The triangles of one part as a mesh of its own, with the vertices that they use. */

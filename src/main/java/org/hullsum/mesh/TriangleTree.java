@@ -32,6 +32,13 @@ public final class TriangleTree {
   /** What a line meets: where, and in which triangle. */
   record Hit(double place, int triangle) {}
 
+  private TriangleTree(TriangleMesh mesh, int[] order, double[] boxes, int depth) {
+    this.mesh = mesh;
+    this.order = order;
+    this.boxes = boxes;
+    this.depth = depth;
+  }
+
   private TriangleTree(TriangleMesh mesh) {
     this.mesh = mesh;
     int count = mesh.triangleCount();
@@ -48,6 +55,13 @@ public final class TriangleTree {
   /** Builds the tree; linear in the number of triangles. */
   public static TriangleTree of(TriangleMesh mesh) {
     return new TriangleTree(mesh);
+  }
+
+  /** The tree of the same triangles, those turned that face against the others. */
+  public TriangleTree agreed(MeshTopology topology) {
+    return topology.againstCount() == 0
+        ? this
+        : new TriangleTree(mesh.turned(topology::isAgainst), order, boxes, depth);
   }
 
   private void build(int node, int from, int to, int level) {

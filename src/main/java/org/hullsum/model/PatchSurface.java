@@ -38,8 +38,9 @@ public sealed interface PatchSurface {
   /**
    * A triangle mesh; its construction normal is each triangle's right-hand rule.
    *
-   * @param topology of the mesh, in working units of length
-   * @param tree for lines through it
+   * @param topology of the mesh as drawn, in working units of length
+   * @param tree of the mesh with the triangles turned that face against the others: the surface
+   *     that it bounds a region with
    * @param weld what was welded within a length, where that was asked for
    */
   record Triangles(MeshTopology topology, TriangleTree tree, Optional<MeshWeld> weld)
@@ -50,6 +51,7 @@ public sealed interface PatchSurface {
       Objects.requireNonNull(weld, "weld");
     }
 
+    /** As drawn. */
     public TriangleMesh mesh() {
       return topology.mesh();
     }
