@@ -8,19 +8,21 @@ import java.nio.file.Files;
 import java.nio.file.Path;
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Map;
 import java.util.Optional;
+import java.util.OptionalDouble;
 import java.util.stream.Stream;
 import org.hullsum.audit.PatchResult.FoundFacing;
-import org.hullsum.casefile.CaseReader;
-import org.hullsum.casefile.ReadOptions;
-import org.hullsum.mesh.Meshes;
+import org.hullsum.closure.FoundFacing.Side;
+import org.hullsum.closure.WindingOpinion;
+import org.hullsum.closure.WindingOpinion.Numbers;
+import org.hullsum.closure.WindingOpinion.Vote;
+import org.hullsum.flux.InputSensitivity;
 import org.hullsum.model.Case;
-import org.hullsum.numeric.Vector3;
 import org.hullsum.problem.Finding;
 import org.hullsum.problem.FindingCode;
 import org.hullsum.problem.Severity;
 import org.junit.jupiter.api.Test;
-import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
@@ -125,49 +127,42 @@ class SecondOpinionAuditTest {
     assertEquals(Optional.empty(), Audits.only(result).interior());
   }
 
-  /** A ball of triangles, those from number to number turned. */
-  private static Case ball(Path folder, int from, int to) throws IOException {
-    StringBuilder stl = new StringBuilder("solid ball\n");
-    Vector3[][] triangles = Meshes.icosphere(3);
-    for (int n = 0; n < triangles.length; n++) {
-      Vector3[] t = triangles[n];
-      boolean turn = n >= from && n < to;
-      stl.append("facet normal 0 0 0\nouter loop\n");
-      for (int k : turn ? new int[] {0, 2, 1} : new int[] {0, 1, 2}) {
-        stl.append("vertex " + t[k].x() + " " + t[k].y() + " " + t[k].z() + "\n");
-      }
-      stl.append("endloop\nendfacet\n");
-    }
-    Files.writeString(folder.resolve("ball.stl"), stl + "endsolid ball\n");
-    Path file = folder.resolve("case.yaml");
-    Files.writeString(
-        file,
-        """
-        format: hullsum-case/1
-        quantity: volume
-        fields: {flow: {vector: ["(1 1/s)*x", "0", "0"], unit: m/s}}
-        volumes: {ball: {}}
-        patches:
-          skin:
-            leaves: ball
-            surface: {mesh: {file: ball.stl, unit: m}}
-            flux: {field: flow}
-        """);
-    return CaseReader.read(file, ReadOptions.named("case.yaml")).found().orElseThrow();
-  }
-
   @Test
-  void turnedTrianglesThatLinesDoNotSeeAreAgainstTheWindingNumbers(@TempDir Path folder)
-      throws IOException {
-    CaseResult result = asked(ball(folder, 750, 1080), 1);
-    Finding finding =
-        Audits.finding(result, FindingCode.SECOND_OPINION_DIFFERS, "ball").orElseThrow();
+  void numbersAndVotesAgainstTheFacingsAreToldWithTheirFigures() {
+    Case audited = Audits.text(new BoxCase().yaml());
+    InputSensitivity inputs = InputSensitivity.of(audited.inputs());
+    PatchIntegration integration =
+        new PatchIntegration(inputs, List.of(OptionalDouble.empty()), AuditOptions.USUAL_DIGITS);
+    List<PatchAudit> patches = audited.patches().stream().map(integration::integrate).toList();
+    SurfaceInspection inspection = new SurfaceInspection(patches, inputs.values());
+    SurfaceAudit surface =
+        inspection
+            .judge(new LineInspection(audited).look().stream().map(inspection::sew).toList())
+            .get(0);
+    List<Vote> votes = new ArrayList<>();
+    for (int k = 0; k < patches.size(); k++) {
+      votes.add(new Vote(k == 2 ? Side.IN : Side.OUT, 0.1, 0.9));
+    }
+    WindingOpinion opinion =
+        new WindingOpinion(
+            Optional.of(
+                List.of(
+                    new Numbers(1, 0.7, 0, 1e-6),
+                    new Numbers(2, 0.5, 0.1, 1e-6),
+                    new Numbers(3, 1, 0, 1e-6))),
+            votes);
+    Finding finding = SecondOpinionFindings.of(surface, Map.of("box", opinion)).orElseThrow();
+    assertEquals(FindingCode.SECOND_OPINION_DIFFERS, finding.code());
     assertEquals(Severity.WARNING, finding.severity());
-    assertEquals("skin", finding.evidence().get("worst"));
-    assertTrue((double) finding.evidence().get("inside") < 0.75, finding.message());
     assertEquals(
-        Optional.empty(),
-        Audits.finding(asked(ball(folder, 0, 0), 1), FindingCode.SECOND_OPINION_DIFFERS, "ball"));
+        "winding numbers disagree with the facings that seams and lines found in `box`: beside"
+            + " `front` the surface winds 0.50 times round a point inside and 0.10 times round one"
+            + " outside, where 1 and 0 belong (and not as it should beside `right`); with `front`"
+            + " the other way round they would fit",
+        finding.message());
+    assertEquals(0.5, finding.evidence().get("inside"));
+    assertEquals(List.of("front"), finding.evidence().get("turned"));
+    assertEquals(Optional.empty(), SecondOpinionFindings.of(surface, Map.of()));
   }
 
   @Test
