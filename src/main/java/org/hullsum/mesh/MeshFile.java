@@ -31,7 +31,7 @@ public final class MeshFile {
       return StlRecords.read(path, records.getAsInt(), threads);
     }
     TriangleMeshBuilder builder = new TriangleMeshBuilder();
-    read(path, StlReader::read, builder);
+    read(path, builder);
     return builder;
   }
 
@@ -54,13 +54,11 @@ public final class MeshFile {
   /**
    * Reads a file.
    *
-   * @param stl reads what turns out to be STL
    * @return the format that the file turned out to have
    */
-  static MeshFormat read(Path path, MeshReader stl, TriangleSink sink)
-      throws IOException, MeshFault {
+  static MeshFormat read(Path path, TriangleSink sink) throws IOException, MeshFault {
     try (SeekableByteChannel file = Files.newByteChannel(path)) {
-      return read(file, file.size(), String.valueOf(path.getFileName()), stl, sink);
+      return read(file, file.size(), String.valueOf(path.getFileName()), sink);
     }
   }
 
@@ -70,25 +68,23 @@ public final class MeshFile {
    * @param size bytes that the channel has, negative where it is not known
    * @param name the name of the file, for its ending
    */
-  static MeshFormat read(
-      ReadableByteChannel channel, long size, String name, MeshReader stl, TriangleSink sink)
+  static MeshFormat read(ReadableByteChannel channel, long size, String name, TriangleSink sink)
       throws IOException, MeshFault {
     try {
       PeekedChannel file = new PeekedChannel(channel, MeshFormat.HEAD);
       byte[] head = file.head();
       if (!isPacked(head)) {
-        return readPlain(file, size, name, stl, sink);
+        return readPlain(file, size, name, sink);
       }
       try (PeekedChannel plain = new PeekedChannel(new GunzipChannel(file), MeshFormat.HEAD)) {
-        return readPlain(plain, -1, name, stl, sink);
+        return readPlain(plain, -1, name, sink);
       }
     } catch (PackedFault broken) {
       throw MeshFault.atByte(0, broken.getMessage());
     }
   }
 
-  private static MeshFormat readPlain(
-      PeekedChannel file, long size, String name, MeshReader stl, TriangleSink sink)
+  private static MeshFormat readPlain(PeekedChannel file, long size, String name, TriangleSink sink)
       throws IOException, MeshFault {
     byte[] head = file.head();
     if (head.length == 0) {
@@ -104,7 +100,7 @@ public final class MeshFile {
                             + " PLY, OBJ or VTK"));
     MeshReader reader =
         switch (format) {
-          case STL -> stl;
+          case STL -> StlReader::read;
           case PLY -> PlyReader::read;
           case OBJ -> ObjReader::read;
           case VTK_LEGACY -> VtkLegacyReader::read;

@@ -10,8 +10,9 @@ import java.util.Locale;
  * as text. Stored normals are passed over: the order of the corners says the side. Each {@code
  * solid} of a text is a part.
  *
- * <p>A file is a text if it begins with {@code solid} and the word {@code facet} or {@code
- * endsolid} follows in its head; binary files that begin with {@code solid} are common.
+ * <p>A file is a text if it begins with {@code solid}, the word {@code facet} or {@code endsolid}
+ * follows in its head, and no byte there is zero; binary files that begin with {@code solid} are
+ * common. One whose size agrees with its count is read by {@link StlRecords} and never comes here.
  */
 final class StlReader {
   private static final int HEADER = 80;
@@ -19,6 +20,9 @@ final class StlReader {
   private static final int NORMAL = 12;
   private static final int ATTRIBUTE = 2;
   private static final int HEAD = 512;
+
+  /** As its bytes look in Latin 1. */
+  private static final String BYTE_ORDER_MARK = "\u00ef\u00bb\u00bf";
 
   private final ByteCursor bytes;
   private final TriangleSink sink;
@@ -40,9 +44,12 @@ final class StlReader {
                 java.nio.charset.StandardCharsets.ISO_8859_1)
             .toLowerCase(Locale.ROOT);
     StlReader reader = new StlReader(bytes, sink);
+    boolean marked = head.startsWith(BYTE_ORDER_MARK);
     boolean text =
-        head.stripLeading().startsWith("solid")
-            && (head.contains("facet") || head.contains("endsolid"));
+        head.substring(marked ? BYTE_ORDER_MARK.length() : 0).stripLeading().startsWith("solid")
+            && (head.contains("facet") || head.contains("endsolid"))
+            && head.indexOf('\0') < 0;
+    bytes.advance(text && marked ? BYTE_ORDER_MARK.length() : 0);
     if (text) {
       reader.readText();
     } else {
@@ -68,16 +75,44 @@ final class StlReader {
       sink.triangle(a, b, c);
     }
     if (read < stated) {
+      boolean whole = bytes.available(1) == 0;
       throw bytes.fault(
-          "the file states " + stated + " triangles and ends within number " + (read + 1));
+          "the file states "
+              + stated
+              + " triangles in bytes 80 to 83 and ends "
+              + (whole ? "after number " + read : "within number " + (read + 1))
+              + "; export it again, or mend the count");
     }
-    if (stated == 0) {
-      throw bytes.fault("the file states 0 triangles");
+    checkEnd(stated);
+  }
+
+  /** Nothing but zeros may follow the last triangle, as some programs fill blocks with them. */
+  private void checkEnd(long stated) throws IOException, MeshFault {
+    long offset = bytes.offset();
+    long behind = 0;
+    boolean filling = true;
+    while (bytes.available(1) > 0) {
+      filling &= bytes.peek() == 0;
+      bytes.advance(1);
+      behind++;
     }
-    if (bytes.available(1) > 0) {
-      throw bytes.fault(
-          "the file goes on behind the " + stated + " triangles that it states; which is right?");
+    if (stated == 0 || !filling) {
+      throw bytes.faultAt(
+          offset,
+          "the file states "
+              + stated
+              + " triangles in bytes 80 to 83 and "
+              + (behind == 0
+                  ? "has none"
+                  : "goes on for " + behind + " bytes, " + more(behind) + " behind them")
+              + "; export it again, or mend the count");
     }
+  }
+
+  private static String more(long bytes) {
+    return bytes % TRIANGLE == 0
+        ? bytes / TRIANGLE + " triangles more"
+        : "not a whole number of triangles";
   }
 
   private int corner() throws IOException, MeshFault {

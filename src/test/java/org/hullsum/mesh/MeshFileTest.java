@@ -7,7 +7,6 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.ByteArrayOutputStream;
 import java.io.IOException;
-import java.nio.ByteBuffer;
 import java.nio.ByteOrder;
 import java.nio.charset.StandardCharsets;
 import java.nio.file.Files;
@@ -50,17 +49,18 @@ class MeshFileTest {
       POLYGONS 1 4
       3 0 1 2
       """;
-  private static final String STL = "solid lid\nendsolid lid\n";
-
-  /** Stands for the reader of STL: takes all bytes and tells one triangle. */
-  private static final MeshReader STL_READER =
-      (file, sink) -> {
-        ByteBuffer bytes = ByteBuffer.allocate(1 << 12);
-        while (file.read(bytes) >= 0) {
-          bytes.clear();
-        }
-        sink.triangle(sink.vertex(0, 0, 0), sink.vertex(1, 0, 0), sink.vertex(0, 1, 0));
-      };
+  private static final String STL =
+      """
+      solid lid
+      facet normal 0 0 1
+      outer loop
+      vertex 0 0 0
+      vertex 1 0 0
+      vertex 0 1 0
+      endloop
+      endfacet
+      endsolid lid
+      """;
 
   private static byte[] content(String format) {
     return switch (format) {
@@ -83,8 +83,7 @@ class MeshFileTest {
 
   private static MeshFormat read(byte[] file, String name) throws IOException, MeshFault {
     RecordedTriangles sink = new RecordedTriangles();
-    MeshFormat format =
-        MeshFile.read(RecordedTriangles.channel(file), file.length, name, STL_READER, sink);
+    MeshFormat format = MeshFile.read(RecordedTriangles.channel(file), file.length, name, sink);
     assertTrue(sink.triangleCount() > 0);
     assertFalse(format.carriesUnit());
     return format;
@@ -111,7 +110,7 @@ class MeshFileTest {
   @Test
   void fileOnDiskIsRead(@TempDir Path folder) throws Exception {
     Path file = Files.write(folder.resolve("sump.dat"), gzip(content("PLY")));
-    assertEquals(MeshFormat.PLY, MeshFile.read(file, STL_READER, new RecordedTriangles()));
+    assertEquals(MeshFormat.PLY, MeshFile.read(file, new RecordedTriangles()));
   }
 
   @Test

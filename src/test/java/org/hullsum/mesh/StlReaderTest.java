@@ -104,13 +104,15 @@ class StlReaderTest {
   void faultsNameTheByteOrTheLine() {
     byte[] good = binary(BOX, "x");
     assertEquals(
-        "the file states 12 triangles and ends within number 12",
+        "the file states 12 triangles in bytes 80 to 83 and ends within number 12; export it again,"
+            + " or mend the count",
         fault(Arrays.copyOf(good, good.length - 1)).getMessage());
     assertEquals(84 + 11 * 50, fault(Arrays.copyOf(good, good.length - 1)).offset().getAsLong());
     byte[] counted = good.clone();
     counted[83] = (byte) 0xff;
     assertTrue(fault(counted).getMessage().contains("states 4278190092 triangles"));
     byte[] longer = Arrays.copyOf(good, good.length + 3);
+    longer[good.length + 1] = 7;
     assertEquals(good.length, fault(longer).offset().getAsLong());
     byte[] infinite = good.clone();
     infinite[84 + 12 + 3] = 0x7f;
@@ -145,6 +147,65 @@ class StlReaderTest {
       } catch (MeshFault fault) {
         assertTrue(fault.offset().isPresent() || fault.line().isPresent());
       }
+    }
+  }
+
+  @Test
+  void binaryFileWhoseHeadHoldsTheWordsOfATextIsBinary() throws IOException, MeshFault {
+    TriangleMesh mesh = read(binary(BOX, "solid box of 12 facet triangles"));
+    assertEquals(12, mesh.triangleCount());
+  }
+
+  @Test
+  void zerosBehindTheLastTriangleAreFilling() throws IOException, MeshFault {
+    byte[] filled = Arrays.copyOf(binary(BOX, "filled"), 1024);
+    assertEquals(12, read(filled).triangleCount());
+  }
+
+  @Test
+  void wrongCountIsToldWithWhatTheFileHolds() {
+    byte[] few = binary(BOX, "few");
+    few[80] = 10;
+    MeshFault more = fault(few);
+    assertEquals(84 + 500, more.offset().orElseThrow());
+    assertTrue(more.getMessage().contains("states 10 triangles"), more.getMessage());
+    assertTrue(more.getMessage().contains("2 triangles more behind them"), more.getMessage());
+    byte[] many = binary(BOX, "many");
+    many[80] = 20;
+    assertTrue(fault(many).getMessage().contains("ends after number 12"), "many");
+    byte[] minus = binary(BOX, "minus");
+    Arrays.fill(minus, 80, 84, (byte) 0xff);
+    assertTrue(fault(minus).getMessage().contains("states 4294967295 triangles"), "minus");
+    byte[] none = binary(BOX, "none");
+    none[80] = 0;
+    assertTrue(fault(none).getMessage().contains("12 triangles more behind them"), "none");
+    byte[] torn = Arrays.copyOf(binary(BOX, "torn"), 84 + 120);
+    assertTrue(fault(torn).getMessage().contains("ends within number 3"), "torn");
+  }
+
+  @Test
+  void byteOrderMarkAndBlanksBeforeATextArePassed() throws IOException, MeshFault {
+    byte[] text = ("\uFEFF" + text(BOX, "box")).getBytes(StandardCharsets.UTF_8);
+    assertEquals(12, read(text).triangleCount());
+    assertEquals(12, read("\n\t " + text(BOX, "box")).triangleCount());
+  }
+
+  @Test
+  void strangeTextIsRefusedWithItsLine() {
+    String sound = text(BOX, "box");
+    String[][] faults = {
+      {"vertex 1.0 0.0 0.0", "vertex 1,0 0.0 0.0"},
+      {"vertex 1.0 0.0 0.0", "vertex 1.0 0.0"},
+      {"vertex 1.0 0.0 0.0", "vertex 1e999 0.0 0.0"},
+      {"endloop", "vertex 1 1 1\nendloop"},
+      {"outer loop", "outerloop"},
+      {"endfacet", "endfact"},
+      {"facet normal", "color 1 0 0\nfacet normal"}
+    };
+    for (String[] fault : faults) {
+      MeshFault told =
+          fault(sound.replaceFirst(fault[0], fault[1]).getBytes(StandardCharsets.UTF_8));
+      assertTrue(told.line().orElseThrow() > 1, told.getMessage());
     }
   }
 }
