@@ -16,14 +16,16 @@ final class MeshSums {
   private static final int SQUARES = 13;
   private static final int COMPONENTS = 16;
 
-  /** Roundings of one triangle's terms, relative to their size; the sums are compensated. */
-  private static final double ROUNDING = 8 * Math.ulp(1.0);
+  /** Triangles whose terms are added plainly; the sums of the blocks are compensated. */
+  private static final int BLOCK = 16;
+
+  /** Roundings of one triangle's terms and of a block's sums, relative to their size. */
+  private static final double ROUNDING = (8 + BLOCK) * Math.ulp(1.0);
 
   private final TriangleMesh mesh;
   private final Vector3 reference;
   private final double[] sums = new double[COMPONENTS];
   private final double[] rests = new double[COMPONENTS];
-  private final double[] terms = new double[COMPONENTS];
 
   private MeshSums(TriangleMesh mesh, Vector3 reference) {
     this.mesh = mesh;
@@ -33,8 +35,8 @@ final class MeshSums {
   static PatchGeometry of(TriangleMesh mesh) {
     Box3 box = box(mesh);
     MeshSums sums = new MeshSums(mesh, box.centre());
-    for (int t = 0; t < mesh.triangleCount(); t++) {
-      sums.add(t);
+    for (int t = 0; t < mesh.triangleCount(); t += BLOCK) {
+      sums.add(t, Math.min(mesh.triangleCount(), t + BLOCK));
     }
     double area = sums.total(AREA);
     double size = box.diagonal();
@@ -76,48 +78,93 @@ final class MeshSums {
     return new Vector3(total(k), total(k + 1), total(k + 2));
   }
 
-  /** One triangle: r is linear on it, and the mean of |r|² is (Σ|r_k|² + |Σ r_k|²)/12. */
-  private void add(int t) {
-    int a = mesh.corner(t, 0);
-    int b = mesh.corner(t, 1);
-    int c = mesh.corner(t, 2);
-    double ax = mesh.x(a) - reference.x();
-    double ay = mesh.y(a) - reference.y();
-    double az = mesh.z(a) - reference.z();
-    double bx = mesh.x(b) - reference.x();
-    double by = mesh.y(b) - reference.y();
-    double bz = mesh.z(b) - reference.z();
-    double cx = mesh.x(c) - reference.x();
-    double cy = mesh.y(c) - reference.y();
-    double cz = mesh.z(c) - reference.z();
-    double nx = 0.5 * ((by - ay) * (cz - az) - (bz - az) * (cy - ay));
-    double ny = 0.5 * ((bz - az) * (cx - ax) - (bx - ax) * (cz - az));
-    double nz = 0.5 * ((bx - ax) * (cy - ay) - (by - ay) * (cx - ax));
-    double sx = ax + bx + cx;
-    double sy = ay + by + cy;
-    double sz = az + bz + cz;
-    double squares = ax * ax + ay * ay + az * az + bx * bx + by * by + bz * bz;
-    squares += cx * cx + cy * cy + cz * cz + sx * sx + sy * sy + sz * sz;
-    terms[AREA] = Math.sqrt(nx * nx + ny * ny + nz * nz);
-    set(VECTOR, nx, ny, nz, 1);
-    set(MOMENTS, nx, ny, nz, sx / 3);
-    set(MOMENTS + 3, nx, ny, nz, sy / 3);
-    set(MOMENTS + 6, nx, ny, nz, sz / 3);
-    set(SQUARES, nx, ny, nz, squares / 24);
-    for (int k = 0; k < COMPONENTS; k++) {
-      double before = sums[k];
-      double after = before + terms[k];
-      rests[k] +=
-          Math.abs(before) >= Math.abs(terms[k])
-              ? before - after + terms[k]
-              : terms[k] - after + before;
-      sums[k] = after;
+  /** Some triangles: r is linear on each, and the mean of |r|² is (Σ|r_k|² + |Σ r_k|²)/12. */
+  private void add(int from, int to) {
+    double area = 0;
+    double vx = 0;
+    double vy = 0;
+    double vz = 0;
+    double xx = 0;
+    double xy = 0;
+    double xz = 0;
+    double yx = 0;
+    double yy = 0;
+    double yz = 0;
+    double zx = 0;
+    double zy = 0;
+    double zz = 0;
+    double qx = 0;
+    double qy = 0;
+    double qz = 0;
+    for (int t = from; t < to; t++) {
+      double ax = x(t, 0);
+      double ay = y(t, 0);
+      double az = z(t, 0);
+      double bx = x(t, 1);
+      double by = y(t, 1);
+      double bz = z(t, 1);
+      double cx = x(t, 2);
+      double cy = y(t, 2);
+      double cz = z(t, 2);
+      double nx = 0.5 * ((by - ay) * (cz - az) - (bz - az) * (cy - ay));
+      double ny = 0.5 * ((bz - az) * (cx - ax) - (bx - ax) * (cz - az));
+      double nz = 0.5 * ((bx - ax) * (cy - ay) - (by - ay) * (cx - ax));
+      double sx = ax + bx + cx;
+      double sy = ay + by + cy;
+      double sz = az + bz + cz;
+      double squares =
+          square(ax, ay, az) + square(bx, by, bz) + square(cx, cy, cz) + square(sx, sy, sz);
+      area += Math.sqrt(square(nx, ny, nz));
+      vx += nx;
+      vy += ny;
+      vz += nz;
+      xx += sx * nx;
+      xy += sx * ny;
+      xz += sx * nz;
+      yx += sy * nx;
+      yy += sy * ny;
+      yz += sy * nz;
+      zx += sz * nx;
+      zy += sz * ny;
+      zz += sz * nz;
+      qx += squares * nx;
+      qy += squares * ny;
+      qz += squares * nz;
     }
+    add(AREA, area);
+    add(VECTOR, vx, vy, vz, 1);
+    add(MOMENTS, xx, xy, xz, 1.0 / 3);
+    add(MOMENTS + 3, yx, yy, yz, 1.0 / 3);
+    add(MOMENTS + 6, zx, zy, zz, 1.0 / 3);
+    add(SQUARES, qx, qy, qz, 1.0 / 24);
   }
 
-  private void set(int k, double nx, double ny, double nz, double factor) {
-    terms[k] = factor * nx;
-    terms[k + 1] = factor * ny;
-    terms[k + 2] = factor * nz;
+  private double x(int t, int k) {
+    return mesh.x(mesh.corner(t, k)) - reference.x();
+  }
+
+  private double y(int t, int k) {
+    return mesh.y(mesh.corner(t, k)) - reference.y();
+  }
+
+  private double z(int t, int k) {
+    return mesh.z(mesh.corner(t, k)) - reference.z();
+  }
+
+  private static double square(double x, double y, double z) {
+    return x * x + y * y + z * z;
+  }
+
+  private void add(int k, double x, double y, double z, double factor) {
+    add(k, factor * x);
+    add(k + 1, factor * y);
+    add(k + 2, factor * z);
+  }
+
+  private void add(int k, double more) {
+    double before = sums[k];
+    double after = before + more;
+    rests[k] += Math.abs(before) >= Math.abs(more) ? before - after + more : more - after + before;
+    sums[k] = after;
   }
 }

@@ -3,6 +3,7 @@ package org.hullsum.mesh;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.Optional;
+import java.util.function.IntConsumer;
 import org.hullsum.numeric.Box3;
 import org.hullsum.numeric.Interval;
 import org.hullsum.numeric.Vector3;
@@ -190,6 +191,43 @@ public final class TriangleTree {
   public LineHits along(Vector3 origin, Vector3 direction, double reach) {
     LineSearch search = search(origin, direction, reach);
     return new LineHits(search.hits.stream().map(Hit::place).sorted().toList(), search.doubtful);
+  }
+
+  /** Tells the triangles whose boxes have a point in common with that of a triangle. */
+  void near(int triangle, IntConsumer visitor) {
+    double[] box = boxOf(triangle);
+    near(1, 0, order.length, 0, box, visitor);
+  }
+
+  private double[] boxOf(int triangle) {
+    double[] box = new double[6];
+    for (int k = 0; k < 3; k++) {
+      box[k] = Double.POSITIVE_INFINITY;
+      box[3 + k] = Double.NEGATIVE_INFINITY;
+      for (int corner = 0; corner < 3; corner++) {
+        double c = mesh.vertex(mesh.corner(triangle, corner)).component(k);
+        box[k] = Math.min(box[k], c);
+        box[3 + k] = Math.max(box[3 + k], c);
+      }
+    }
+    return box;
+  }
+
+  private void near(int node, int from, int to, int level, double[] box, IntConsumer visitor) {
+    for (int k = 0; k < 3; k++) {
+      if (boxes[6 * node + k] > box[3 + k] || boxes[6 * node + 3 + k] < box[k]) {
+        return;
+      }
+    }
+    if (level < depth) {
+      int middle = (from + to) >>> 1;
+      near(2 * node, from, middle, level + 1, box, visitor);
+      near(2 * node + 1, middle, to, level + 1, box, visitor);
+      return;
+    }
+    for (int i = from; i < to; i++) {
+      visitor.accept(order[i]);
+    }
   }
 
   /** The triangles that such a line crosses, in no order; empty where one of them is doubtful. */
