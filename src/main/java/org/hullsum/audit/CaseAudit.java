@@ -201,6 +201,10 @@ final class CaseAudit {
           rates.stream().map(r -> r.get(patch)).toList(),
           tolerancesOf(patches.get(p).patch()),
           judge);
+      if (options.secondOpinion()) {
+        findings.addAll(
+            SelfIntersectionFindings.of(patches.get(p).patch(), scales, options.threads()));
+      }
     }
     findings.addAll(facings.findings(patches));
     surfaces.forEach(surface -> findings.addSurface(surface, facings.byWindingAlone()));

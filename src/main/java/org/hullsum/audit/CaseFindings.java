@@ -182,6 +182,7 @@ final class CaseFindings {
     surface.sewn().shells().stream()
         .filter(shell -> !shell.consistent())
         .forEach(shell -> addTwisted(surface, shell));
+    findings.addAll(FacetingFindings.of(surface, scales));
     surface.offered().stream()
         .filter(name -> !told.contains(name))
         .forEach(name -> addOffered(surface, name));

@@ -1,18 +1,22 @@
 package org.hullsum.audit;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.IOException;
 import java.nio.file.Files;
 import java.nio.file.Path;
+import java.util.Arrays;
 import java.util.Optional;
 import java.util.Random;
 import org.hullsum.casefile.CaseReader;
 import org.hullsum.casefile.ReadOptions;
 import org.hullsum.mesh.Meshes;
+import org.hullsum.model.Case;
 import org.hullsum.numeric.Vector3;
 import org.hullsum.problem.Finding;
 import org.hullsum.problem.FindingCode;
+import org.junit.jupiter.api.Test;
 import org.junit.jupiter.api.io.TempDir;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.ValueSource;
@@ -22,6 +26,10 @@ class TurnedTrianglesTest {
   @TempDir Path folder;
 
   private CaseResult audit(Vector3[][] triangles) throws IOException {
+    return Audits.audit(read(triangles));
+  }
+
+  private Case read(Vector3[][] triangles) throws IOException {
     StringBuilder obj = new StringBuilder();
     int n = 0;
     for (Vector3[] t : triangles) {
@@ -45,8 +53,7 @@ class TurnedTrianglesTest {
             patches:
               skin: {leaves: ball, surface: {mesh: {file: ball.obj}}, flux: {field: flow}}
             """);
-    return Audits.audit(
-        CaseReader.read(file, ReadOptions.named("case.yaml")).found().orElseThrow());
+    return CaseReader.read(file, ReadOptions.named("case.yaml")).found().orElseThrow();
   }
 
   @ParameterizedTest
@@ -82,5 +89,29 @@ class TurnedTrianglesTest {
             .orElseThrow();
     assertEquals(
         (long) Math.min(turned, sound.length - turned), finding.evidence().get("triangles"));
+  }
+
+  @Test
+  void trianglesThatPassThroughOneAnotherAreToldWhereASecondOpinionIsAsked() throws IOException {
+    Vector3[][] ball = Meshes.icosphere(2);
+    Vector3[][] two = Arrays.copyOf(ball, 2 * ball.length);
+    for (int t = 0; t < ball.length; t++) {
+      two[ball.length + t] = new Vector3[3];
+      for (int k = 0; k < 3; k++) {
+        two[ball.length + t][k] = ball[t][k].plus(new Vector3(1.0123, 0.021, 0.013));
+      }
+    }
+    Case crossing = read(two);
+    AuditOptions usual = AuditOptions.usual(Audits.TODAY);
+    AuditOptions asked = new AuditOptions(usual.digits(), 2, usual.today(), usual.progress(), true);
+    CaseResult unasked = Audits.audit(crossing);
+    assertTrue(Audits.finding(unasked, FindingCode.MESH_SELF_INTERSECTING, "skin").isEmpty());
+    Finding finding =
+        Audits.finding(Auditor.audit(crossing, asked), FindingCode.MESH_SELF_INTERSECTING, "skin")
+            .orElseThrow();
+    assertTrue((int) finding.evidence().get("pairs") > 30, finding.message());
+    assertTrue(
+        Audits.finding(Auditor.audit(read(ball), asked), FindingCode.MESH_SELF_INTERSECTING, "skin")
+            .isEmpty());
   }
 }
