@@ -277,9 +277,18 @@ final class CaseAudit {
                 surface.patches().get(overlap.second()).name()));
       }
     }
+    boolean closed = explained.stream().allMatch(b -> b.result().verdict() == Verdict.BALANCED);
     Clues clues =
-        new Clues(facings.inward(), surfaced, overlaps, open, surfaceless, gapClues, fields);
-    return new Explainer(clues).explain(explained);
+        new Clues(
+            facings.inward(),
+            surfaced,
+            overlaps,
+            open,
+            surfaceless,
+            gapClues,
+            fields,
+            closed ? Map.of() : new PatchCauses(audited, inputs).all());
+    return new Explainer(clues, audited.inputs()).explain(explained);
   }
 
   private static List<String> fieldsOf(BalanceSubject subject, List<InteriorAudit> interiors) {

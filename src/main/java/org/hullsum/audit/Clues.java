@@ -15,6 +15,7 @@ import java.util.Set;
  * @param surfaceless volumes with a patch without surface, of whose closedness nothing can be said
  * @param gaps by volume or envelope
  * @param fields the names of the fields that give every flux, by volume or envelope
+ * @param causes what may be wrong with the figures of a patch, by its name
  */
 record Clues(
     Set<String> inward,
@@ -23,10 +24,11 @@ record Clues(
     Set<String> open,
     Set<String> surfaceless,
     Map<String, Gap> gaps,
-    Map<String, List<String>> fields) {
+    Map<String, List<String>> fields,
+    Map<String, List<PatchCause>> causes) {
   /** Nothing known. */
   static final Clues NONE =
-      new Clues(Set.of(), Set.of(), List.of(), Set.of(), Set.of(), Map.of(), Map.of());
+      new Clues(Set.of(), Set.of(), List.of(), Set.of(), Set.of(), Map.of(), Map.of(), Map.of());
 
   /**
    * Two patches of one volume that cover the same piece of surface.
@@ -62,6 +64,11 @@ record Clues(
     }
   }
 
+  /** Whether a flow may be left out: where no closed surface shows that none is. */
+  boolean mayLack(BalanceSubject subject) {
+    return subject.members().stream().anyMatch(m -> open.contains(m) || surfaceless.contains(m));
+  }
+
   Clues {
     inward = Set.copyOf(inward);
     surfaced = Set.copyOf(surfaced);
@@ -70,5 +77,6 @@ record Clues(
     surfaceless = Set.copyOf(surfaceless);
     gaps = Map.copyOf(gaps);
     fields = Map.copyOf(fields);
+    causes = Map.copyOf(causes);
   }
 }

@@ -38,6 +38,12 @@ public record Explanation(
     GAP,
     FIELD_MAKES_SOURCE,
     COUNTED_TWICE,
+    RADIUS_FOR_DIAMETER,
+    UNIT_SLIP,
+    DENSITY_LEFT_OUT,
+    STALE_LEVEL,
+    ONE_METER_BIAS,
+    LEAK,
     LEFT_OUT;
 
     /** The word of the result document. */

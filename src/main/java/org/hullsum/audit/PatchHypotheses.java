@@ -8,14 +8,14 @@ import java.util.Optional;
 final class PatchHypotheses {
   private final Clues clues;
   private final Balance balance;
-  private final double residual;
+  private final JointResiduals joint;
   private final String unit;
 
-  PatchHypotheses(Clues clues, Balance balance, double residual, String unit) {
+  PatchHypotheses(Clues clues, Balance balance, JointResiduals joint) {
     this.clues = clues;
     this.balance = balance;
-    this.residual = residual;
-    this.unit = unit;
+    this.joint = joint;
+    this.unit = balance.result().unit();
   }
 
   List<Hypothesis> all() {
@@ -38,9 +38,15 @@ final class PatchHypotheses {
         turnedChange += change;
         all.add(shownReversed(List.of(rate.patch()), change));
       } else if (!clues.surfaced().contains(rate.patch()) && outward != 0) {
-        all.add(reversed(rate, outward));
+        all.add(reversed(rate));
       }
       countedTwice(rate, outward).ifPresent(all::add);
+      if (outward != 0) {
+        clues
+            .causes()
+            .getOrDefault(rate.patch(), List.of())
+            .forEach(cause -> all.add(caused(rate, cause)));
+      }
     }
     if (turned.size() > 1) {
       all.add(shownReversed(turned, turnedChange));
@@ -49,31 +55,49 @@ final class PatchHypotheses {
   }
 
   private Hypothesis shownReversed(List<String> patches, double change) {
+    JointResiduals.Judged judged = joint.alone(balance, Estimate.exact(change));
     String names = String.join("`, `", patches);
     return new Hypothesis(
         Explanation.Kind.REVERSED,
         Hypothesis.SHOWN,
         patches,
         Optional.of(-1.0),
-        residual + change,
+        judged.then(),
+        judged.fits(),
         0,
         (patches.size() == 1
                 ? "`" + names + "` faces the wrong way, by where its sides lie"
                 : "`" + names + "` face the wrong way, by where their sides lie")
             + "; turned, "
-            + outcome(residual + change));
+            + outcome(judged)
+            + ".");
   }
 
-  private Hypothesis reversed(PatchRate rate, double outward) {
-    double then = residual - 2 * outward;
-    return new Hypothesis(
+  private Hypothesis reversed(PatchRate rate) {
+    return supposed(
         Explanation.Kind.REVERSED,
+        rate,
+        -1,
+        "what is metered at `" + rate.patch() + "` runs the other way",
+        "check the arrow on the meter's body and the sign in its transmitter");
+  }
+
+  private Hypothesis caused(PatchRate rate, PatchCause cause) {
+    return supposed(cause.kind(), rate, cause.factor(), cause.supposition(), cause.check());
+  }
+
+  private Hypothesis supposed(
+      Explanation.Kind kind, PatchRate rate, double factor, String supposition, String check) {
+    JointResiduals.Judged judged = joint.multiplied(balance, rate.patch(), factor);
+    return new Hypothesis(
+        kind,
         Hypothesis.FREE_OF_NUMBERS,
         List.of(rate.patch()),
-        Optional.of(-1.0),
-        then,
-        0,
-        "If what is metered at `" + rate.patch() + "` ran the other way, " + outcome(then));
+        Optional.of(factor),
+        judged.then(),
+        judged.fits(),
+        judged.unlikelihood(),
+        "If " + supposition + ", " + outcome(judged) + "; " + check + ".");
   }
 
   private Optional<Hypothesis> countedTwice(PatchRate rate, double outward) {
@@ -82,23 +106,15 @@ final class PatchHypotheses {
     if (outward == 0 || (clues.surfaced().contains(rate.patch()) && overlap.isEmpty())) {
       return Optional.empty();
     }
-    double then = residual - outward;
     String evidence =
         overlap.map(o -> ": `" + o.first() + "` and `" + o.second() + "` coincide").orElse("");
     return Optional.of(
-        new Hypothesis(
+        supposed(
             Explanation.Kind.COUNTED_TWICE,
-            Hypothesis.FREE_OF_NUMBERS,
-            List.of(rate.patch()),
-            Optional.of(0.0),
-            then,
+            rate,
             0,
-            "If `"
-                + rate.patch()
-                + "` is counted twice"
-                + evidence
-                + ", then without it "
-                + outcome(then)));
+            "`" + rate.patch() + "` is counted twice" + evidence,
+            "see whether another patch holds the same flow"));
   }
 
   /**
@@ -121,15 +137,17 @@ final class PatchHypotheses {
     if (!allowed || !elsewhere || leavesOutside == entersOutside || value == 0) {
       return Optional.empty();
     }
-    double then = residual + (leavesOutside ? value : -value);
+    Estimate change = rate.total().orElseThrow().times(leavesOutside ? 1 : -1);
+    JointResiduals.Judged judged = joint.alone(balance, change);
     return Optional.of(
         new Hypothesis(
             Explanation.Kind.LEFT_OUT,
             Hypothesis.FREE_OF_NUMBERS,
             List.of(rate.patch()),
             Optional.of(1.0),
-            then,
-            0,
+            judged.then(),
+            judged.fits(),
+            judged.unlikelihood(),
             "If `"
                 + rate.patch()
                 + "` "
@@ -137,13 +155,17 @@ final class PatchHypotheses {
                 + "`"
                 + balance.subject().name()
                 + "` instead of the surroundings, "
-                + outcome(then)));
+                + outcome(judged)
+                + "."));
   }
 
-  /** What is left of the residual then; what is within w is nothing. */
-  private String outcome(double then) {
-    return Math.abs(then) <= balance.halfWidth()
-        ? "the residual would vanish."
-        : "the residual would be " + Figures.text(then, unit) + ".";
+  /** What is left of the residual then; what can't be told from zero is nothing. */
+  private String outcome(JointResiduals.Judged judged) {
+    if (judged.against().isPresent()) {
+      return "the balance of `" + judged.against().get() + "`, which closes, would not any more";
+    }
+    return judged.fits()
+        ? "the residual would vanish"
+        : "the residual would be " + Figures.text(judged.then(), unit);
   }
 }

@@ -11,6 +11,8 @@ import org.hullsum.units.Dimension;
 import org.hullsum.units.MeasuredQuantity;
 import org.hullsum.units.MeasuredQuantityParser;
 import org.hullsum.units.Noted;
+import org.hullsum.units.Quantity;
+import org.hullsum.units.QuantityParser;
 import org.hullsum.units.Unit;
 import org.hullsum.units.WorkingUnits;
 
@@ -133,7 +135,18 @@ final class MeasuredReader {
 
   private Formula exact(YamlText text, Formula formula, String name) {
     double number = scope.value(formula.expression()).orElseThrow();
-    return define(text, name, number, 0, Double.POSITIVE_INFINITY, formula.dimension());
+    return define(
+        text, name, number, 0, Double.POSITIVE_INFINITY, formula.dimension(), statedUnit(text));
+  }
+
+  /** The unit of an exact figure; its formula has none any more. */
+  static Optional<Unit> statedUnit(YamlText text) {
+    try {
+      Quantity quantity = QuantityParser.parse(text.text());
+      return quantity.bare() ? Optional.empty() : Optional.of(quantity.unit());
+    } catch (TextFault noFigure) {
+      return Optional.empty();
+    }
   }
 
   private Optional<Formula> input(YamlText text, MeasuredQuantity figure, String name, Need need) {
@@ -168,7 +181,8 @@ final class MeasuredReader {
             figure.quantity().in(working),
             figure.standardUncertaintyIn(working),
             figure.degreesOfFreedom(),
-            dimension));
+            dimension,
+            figure.quantity().bare() ? Optional.empty() : Optional.of(figure.quantity().unit())));
   }
 
   private Formula define(
@@ -177,7 +191,8 @@ final class MeasuredReader {
       double value,
       double standardUncertainty,
       double degreesOfFreedom,
-      Optional<Dimension> dimension) {
+      Optional<Dimension> dimension,
+      Optional<Unit> unit) {
     String name = scope.freshName(wanted);
     scope.define(
         new Input(
@@ -187,7 +202,8 @@ final class MeasuredReader {
             degreesOfFreedom,
             Optional.empty(),
             true,
-            text.place()),
+            text.place(),
+            unit),
         dimension);
     return new Formula(Expression.symbol(name), dimension);
   }

@@ -202,7 +202,8 @@ final class ParameterReader {
             Double.POSITIVE_INFINITY,
             Figures.isFigure(expression) ? Optional.empty() : Optional.of(expression),
             false,
-            place),
+            place,
+            MeasuredReader.statedUnit(text)),
         formula.get().dimension());
   }
 
@@ -219,7 +220,8 @@ final class ParameterReader {
             figure.degreesOfFreedom(),
             Optional.empty(),
             false,
-            place),
+            place,
+            figure.quantity().bare() ? Optional.empty() : Optional.of(figure.quantity().unit())),
         dimension);
   }
 }

@@ -174,6 +174,38 @@ public final class InputSensitivity {
     return new Evaluated(number(formula, constants), toBases(partials));
   }
 
+  /** The figures on which a formula depends, those that others define resolved. */
+  public Set<String> figuresIn(Expression formula) {
+    Set<String> figures = new LinkedHashSet<>();
+    for (String symbol : Symbols.in(formula)) {
+      Input input = inputs.all().get(symbol);
+      if (input != null && input.definition().isPresent()) {
+        figures.addAll(figuresIn(input.definition().get()));
+      } else if (input != null) {
+        figures.add(symbol);
+      }
+    }
+    return figures;
+  }
+
+  /** A formula of inputs where one figure is another. */
+  public double valueWith(Expression formula, String figure, double other) {
+    Map<String, Double> changed = new LinkedHashMap<>();
+    for (String symbol : Symbols.in(formula)) {
+      Input input = inputs.all().get(symbol);
+      if (input != null) {
+        changed.put(
+            symbol,
+            symbol.equals(figure)
+                ? other
+                : input.definition().isPresent()
+                    ? valueWith(input.definition().get(), figure, other)
+                    : input.value());
+      }
+    }
+    return number(formula, changed);
+  }
+
   /** The constants of a formula at an instant. */
   static Map<String, Double> at(OptionalDouble instant, Map<String, Double> values) {
     if (instant.isEmpty()) {

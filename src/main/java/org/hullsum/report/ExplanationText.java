@@ -1,7 +1,7 @@
 package org.hullsum.report;
 
+import java.util.ArrayList;
 import java.util.List;
-import java.util.stream.Collectors;
 import org.hullsum.audit.BalanceResult;
 import org.hullsum.audit.CaseResult;
 import org.hullsum.audit.Explanation;
@@ -45,6 +45,25 @@ final class ExplanationText {
     }
   }
 
+  /** Numbers, those that follow one another in one go; the explanation's own does not interrupt. */
+  private static String tied(List<Integer> indices, int own) {
+    List<String> runs = new ArrayList<>();
+    for (int i = 0, end = 0; i < indices.size(); i = end + 1) {
+      end = i;
+      while (end + 1 < indices.size() && follows(indices.get(end), indices.get(end + 1), own)) {
+        end++;
+      }
+      int first = indices.get(i) + 1;
+      int last = indices.get(end) + 1;
+      runs.add(first == last ? "no. " + first : "no. " + first + " to " + last);
+    }
+    return String.join(", ", runs);
+  }
+
+  private static boolean follows(int index, int next, int own) {
+    return next == index + 1 || (next == index + 2 && own == index + 2);
+  }
+
   private static void write(
       PageBuilder page, int rank, Explanation explanation, CaseResult audited) {
     String unit =
@@ -53,10 +72,7 @@ final class ExplanationText {
             .map(BalanceResult::unit)
             .findFirst()
             .orElse("1");
-    String tied =
-        explanation.tiedWith().stream()
-            .map(i -> "no. " + (i + 1))
-            .collect(Collectors.joining(", "));
+    String tied = tied(explanation.tiedWith(), rank);
     String number = rank + ". ";
     page.paragraph(
         2,
