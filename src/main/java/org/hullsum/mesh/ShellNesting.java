@@ -3,16 +3,14 @@ package org.hullsum.mesh;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.BitSet;
-import java.util.HashSet;
 import java.util.List;
 import java.util.Optional;
-import java.util.Set;
 import org.hullsum.numeric.Vector3;
 
 /**
  * Which closed shells of a mesh are cavities: those inside an odd number of the others, told by the
- * triangles that a line from one of their triangles crosses. Linear in the number of triangles, and
- * one line for each shell.
+ * number of triangles that lines from one of their own cross. Linear in the number of triangles,
+ * and two lines for each shell.
  */
 final class ShellNesting {
   /** Directions tried for a line that meets no edge. */
@@ -26,6 +24,9 @@ final class ShellNesting {
 
   /** Nearer than this to an edge, relative to the size of the mesh, a line is no witness. */
   private static final double REACH = 1e-12;
+
+  /** Lines that must agree. */
+  private static final int WITNESSES = 2;
 
   /** Triangles of a shell among which the largest is taken. */
   private static final int CHOICE = 8;
@@ -52,14 +53,15 @@ final class ShellNesting {
     int[] shellOf = new int[tree.mesh().triangleCount()];
     Arrays.fill(shellOf, -1);
     int[] queue = new int[shellOf.length];
+    int[] largest = new int[shells.size()];
     for (int s = 0; s < shells.size(); s++) {
-      spread(s, shellOf, queue);
+      largest[s] = spread(s, shellOf, queue);
     }
     BitSet cavities = new BitSet();
     List<MeshShell> judged = new ArrayList<>();
     for (int s = 0; s < shells.size(); s++) {
       MeshShell shell = shells.get(s);
-      cavities.set(s, encloses(shell) && isInsideAnOddNumber(s, shellOf));
+      cavities.set(s, encloses(shell) && isInsideAnOddNumber(s, largest[s], shellOf));
       judged.add(cavities.get(s) ? shell.asCavity() : shell);
     }
     for (int t = 0; t < shellOf.length; t++) {
@@ -70,11 +72,18 @@ final class ShellNesting {
     return judged;
   }
 
-  private void spread(int shell, int[] shellOf, int[] queue) {
+  /** Marks the triangles of a shell; returns the largest of the first few. */
+  private int spread(int shell, int[] shellOf, int[] queue) {
     int size = 0;
     queue[size++] = shells.get(shell).first();
     shellOf[queue[0]] = shell;
+    int largest = queue[0];
+    double area = 0;
     for (int i = 0; i < size; i++) {
+      if (i < CHOICE && tree.mesh().areaVector(queue[i]).norm() > area) {
+        largest = queue[i];
+        area = tree.mesh().areaVector(largest).norm();
+      }
       for (int h = 3 * queue[i]; h < 3 * queue[i] + 3; h++) {
         int mate = pairing.mate(h);
         if (mate >= 0 && shellOf[mate / 3] < 0) {
@@ -83,38 +92,44 @@ final class ShellNesting {
         }
       }
     }
+    return largest;
   }
 
-  private boolean isInsideAnOddNumber(int shell, int[] shellOf) {
+  /**
+   * Whether a shell is inside an odd number of the others, so that a line from the middle of one of
+   * its triangles crosses theirs an odd number of times to either side. Lines whose two sides are
+   * at odds say nothing; {@link #WITNESSES} of the rest decide if they agree.
+   */
+  private boolean isInsideAnOddNumber(int shell, int triangle, int[] shellOf) {
     TriangleMesh mesh = tree.mesh();
-    int best = shells.get(shell).first();
-    int seen = 0;
-    for (int t = best; t < shellOf.length && seen < CHOICE; t++) {
-      if (shellOf[t] == shell) {
-        seen++;
-        best = mesh.areaVector(t).norm() > mesh.areaVector(best).norm() ? t : best;
-      }
-    }
     Vector3 origin =
-        mesh.vertex(mesh.corner(best, 0))
-            .plus(mesh.vertex(mesh.corner(best, 1)))
-            .plus(mesh.vertex(mesh.corner(best, 2)))
+        mesh.vertex(mesh.corner(triangle, 0))
+            .plus(mesh.vertex(mesh.corner(triangle, 1)))
+            .plus(mesh.vertex(mesh.corner(triangle, 2)))
             .times(1.0 / 3);
+    long inside = 0;
+    long outside = 0;
     for (Vector3 direction : DIRECTIONS) {
       Optional<List<TriangleTree.Hit>> hits = tree.hits(origin, direction, REACH * tree.extent());
-      if (hits.isPresent()) {
-        Set<Integer> odd = new HashSet<>();
-        for (TriangleTree.Hit hit : hits.get()) {
-          int other = shellOf[hit.triangle()];
-          if (hit.place() > 0 && other >= 0 && other != shell && encloses(shells.get(other))) {
-            if (!odd.add(other)) {
-              odd.remove(other);
-            }
-          }
-        }
-        return odd.size() % 2 == 1;
+      long ahead = hits.map(h -> crossings(h, 1, shell, shellOf)).orElse(0L);
+      long behind = hits.map(h -> crossings(h, -1, shell, shellOf)).orElse(1L);
+      if ((ahead - behind) % 2 == 0) {
+        inside += ahead % 2;
+        outside += 1 - ahead % 2;
+      }
+      if (inside + outside == WITNESSES) {
+        break;
       }
     }
-    return false;
+    return inside > 0 && outside == 0;
+  }
+
+  /** The triangles of other shells that enclose, crossed on one side of the origin. */
+  private long crossings(List<TriangleTree.Hit> hits, int side, int shell, int[] shellOf) {
+    return hits.stream()
+        .filter(hit -> side * hit.place() > 0)
+        .mapToInt(hit -> shellOf[hit.triangle()])
+        .filter(other -> other >= 0 && other != shell && encloses(shells.get(other)))
+        .count();
   }
 }

@@ -155,4 +155,54 @@ class MeshTopologyTest {
       assertEquals(topology.againstCount(), counted);
     }
   }
+
+  @Test
+  void spheresWithinSpheresFaceOutOfWhatTheyEncloseInEveryCombination() {
+    double[] radii = {3, 2, 1};
+    for (int inward = 0; inward < 8; inward++) {
+      Vector3[][] all = new Vector3[0][];
+      for (int k = 0; k < 3; k++) {
+        Vector3[][] sphere = scaled(Meshes.icosphere(2), radii[k], new Vector3(0.05 * k, 0, 0));
+        boolean[] turn = new boolean[sphere.length];
+        Arrays.fill(turn, (inward >> k & 1) == 1);
+        all = joined(all, Meshes.turned(sphere, turn));
+      }
+      MeshTopology topology = MeshTopology.of(Meshes.of(all));
+      for (int t = 0; t < all.length; t++) {
+        int k = t / 320;
+        assertEquals((inward >> k & 1) == (k == 1 ? 0 : 1), topology.isToTurn(t), "sphere " + k);
+      }
+    }
+  }
+
+  @Test
+  void tenThousandShellsInAShellAreCavitiesAndTheirKernelsAreNot() {
+    int n = 17;
+    Vector3[][] all = Meshes.box(new Vector3(-1, -1, -1), new Vector3(n, n, n));
+    Vector3 corner = new Vector3(0.4, 0.4, 0.4);
+    for (int cell = 0; cell < 2 * n * n * n; cell++) {
+      // Every cavity and then, in it, a kernel that is every fourth one turned.
+      int k = cell / 2;
+      Vector3 middle = new Vector3(k % n, k / n % n, Math.floorDiv(k, n * n));
+      Vector3 half = cell % 2 == 0 ? corner : corner.times(0.5);
+      Vector3[][] box = Meshes.box(middle.minus(half), middle.plus(half));
+      boolean[] turn = new boolean[12];
+      Arrays.fill(turn, cell % 2 == 0 || k % 4 == 0);
+      all = cell == 0 ? Arrays.copyOf(all, 12 + 24 * n * n * n) : all;
+      System.arraycopy(Meshes.turned(box, turn), 0, all, 12 + 12 * cell, 12);
+    }
+    MeshTopology topology = MeshTopology.of(Meshes.of(all));
+    assertEquals(1 + 2 * n * n * n, topology.shells().size());
+    assertEquals((long) n * n * n, topology.shells().stream().filter(MeshShell::cavity).count());
+    for (int t = 0; t < all.length; t++) {
+      int cell = (t - 12) / 12;
+      assertEquals(t >= 12 && cell % 2 == 1 && cell / 2 % 4 == 0, topology.isToTurn(t));
+    }
+  }
+
+  private static Vector3[][] scaled(Vector3[][] triangles, double by, Vector3 middle) {
+    return Arrays.stream(triangles)
+        .map(t -> Arrays.stream(t).map(p -> p.times(by).plus(middle)).toArray(Vector3[]::new))
+        .toArray(Vector3[][]::new);
+  }
 }
