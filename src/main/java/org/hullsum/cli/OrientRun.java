@@ -2,12 +2,14 @@ package org.hullsum.cli;
 
 import java.io.IOException;
 import java.nio.charset.StandardCharsets;
+import java.nio.file.FileAlreadyExistsException;
 import java.nio.file.Files;
 import java.nio.file.Path;
 import java.nio.file.StandardCopyOption;
 import java.time.Clock;
 import java.time.LocalDate;
 import java.time.ZoneOffset;
+import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
@@ -27,7 +29,8 @@ import org.hullsum.report.TextReport;
 
 /**
  * One {@code hullsum orient}: writes the case with the facing of the patches corrected that were
- * found to face inward. What is written is audited before it takes its place.
+ * found to face inward, and copies of meshes some of whose triangles face against the others. What
+ * is written is audited before the case takes its place; if it is not right, no copy stays.
  */
 final class OrientRun {
   private static final String SUFFIX = "-oriented";
@@ -132,20 +135,17 @@ final class OrientRun {
       err.line(target + " is there already; move it away, or ask for --in-place");
       return ExitCode.CANNOT_WRITE;
     }
-    MeshTurner.Plan meshes = MeshTurner.plan(original, mixed);
-    for (MeshTurner.Copy copy : meshes.copies()) {
-      if (Files.exists(copy.file())) {
-        err.line(copy.file() + " is there already; move it away");
-        return ExitCode.CANNOT_WRITE;
-      }
-    }
+    MeshTurner.Plan meshes = MeshTurner.plan(original, mixed, settings.threads());
+    List<Path> fresh = new ArrayList<>();
     Path part = original.resolveSibling(original.getFileName() + ".part.yaml");
+    Files.copy(original, part, StandardCopyOption.COPY_ATTRIBUTES);
     boolean done = false;
     try {
       for (MeshTurner.Copy copy : meshes.copies()) {
-        copy.write();
+        if (copy.write()) {
+          fresh.add(copy.file());
+        }
       }
-      Files.copy(original, part, StandardCopyOption.COPY_ATTRIBUTES);
       Files.write(part, meshes.text().getBytes(StandardCharsets.UTF_8));
       CaseResult now = meshes.copies().isEmpty() ? result : again(part);
       Set<String> inward = inward(now);
@@ -153,10 +153,14 @@ final class OrientRun {
       ExitCode code = write(part, target, inward, meshes).and(whatIsLeft(now));
       done = code != ExitCode.FAULT;
       return code;
+    } catch (FileAlreadyExistsException e) {
+      // Of a copy: the case's own place was looked at before.
+      err.line(e.getFile() + " is there already and holds something else; move it away");
+      return ExitCode.CANNOT_WRITE;
     } finally {
       Files.deleteIfExists(part);
-      for (MeshTurner.Copy copy : done ? List.<MeshTurner.Copy>of() : meshes.copies()) {
-        Files.deleteIfExists(copy.file());
+      for (Path copy : done ? List.<Path>of() : fresh) {
+        Files.deleteIfExists(copy);
       }
     }
   }
@@ -177,9 +181,9 @@ final class OrientRun {
       return ExitCode.IMBALANCED;
     }
     Files.write(part, turned.text().getBytes(StandardCharsets.UTF_8));
-    Optional<String> wrong = stillWrong(part, done);
+    Optional<String> wrong = stillWrong(part, done, meshes);
     if (wrong.isPresent()) {
-      err.line(file + ": " + wrong.get() + " would still face inward; nothing was written");
+      err.line(file + ": " + wrong.get() + "; nothing was written");
       return ExitCode.FAULT;
     }
     Files.move(part, target, StandardCopyOption.ATOMIC_MOVE);
@@ -194,9 +198,20 @@ final class OrientRun {
     return refused.isEmpty() ? ExitCode.FINE : ExitCode.IMBALANCED;
   }
 
-  private Optional<String> stillWrong(Path part, Set<String> done) {
-    Set<String> inward = inward(again(part));
-    return done.stream().filter(inward::contains).findFirst();
+  /** What the case as it would be written has against it. */
+  private Optional<String> stillWrong(Path part, Set<String> done, MeshTurner.Plan meshes) {
+    CaseResult written = again(part);
+    if (written.isUnreadable()) {
+      return Optional.of("what would be written can't be read: " + written.problems().get(0));
+    }
+    Set<String> inward = inward(written);
+    Set<String> mixed = mixed(written);
+    mixed.removeAll(meshes.refused().keySet());
+    return done.stream()
+        .filter(inward::contains)
+        .map(p -> p + " would still face inward")
+        .findFirst()
+        .or(() -> mixed.stream().map(p -> p + " would still be at odds with itself").findFirst());
   }
 
   private static Path beside(Path original) {

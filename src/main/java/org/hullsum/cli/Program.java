@@ -100,7 +100,9 @@ final class Program {
         .usageMessage()
         .description(
             "Writes the case with the facing corrected of every patch that was found to face"
-                + " inward, all else untouched: beside the original, as NAME-oriented.yaml.");
+                + " inward, all else untouched: beside the original, as NAME-oriented.yaml. Of"
+                + " meshes some of whose triangles face against the others it writes turned"
+                + " copies, as NAME-oriented.obj.");
     orient.addPositional(
         PositionalParamSpec.builder()
             .paramLabel("CASE")

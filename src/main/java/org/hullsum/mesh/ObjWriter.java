@@ -2,6 +2,9 @@ package org.hullsum.mesh;
 
 import java.io.IOException;
 import java.io.Writer;
+import java.math.BigDecimal;
+import java.math.MathContext;
+import java.math.RoundingMode;
 import java.util.function.IntPredicate;
 
 /**
@@ -9,7 +12,20 @@ import java.util.function.IntPredicate;
  * the triangles in their order, in a group for each run of one part.
  */
 public final class ObjWriter {
+  /** Bytes of a letter. */
+  private static final int LARGEST_LETTER = 4;
+
+  /** Digits that always tell a double from its neighbours. */
+  private static final int ENOUGH = 17;
+
   private ObjWriter() {}
+
+  /** Whether a part's name reads back as it is: without ends of lines and blanks to be lost. */
+  public static boolean isName(String part) {
+    return part.equals(String.join(" ", part.trim().split("\\s+")))
+        && !part.endsWith("\\")
+        && part.length() < TextCursor.LONGEST_WORD / LARGEST_LETTER;
+  }
 
   /**
    * Writes a mesh.
@@ -18,7 +34,7 @@ public final class ObjWriter {
    */
   public static void write(TriangleMesh mesh, IntPredicate turned, Writer to) throws IOException {
     for (int v = 0; v < mesh.vertexCount(); v++) {
-      to.write("v " + mesh.x(v) + " " + mesh.y(v) + " " + mesh.z(v) + "\n");
+      to.write("v " + text(mesh.x(v)) + " " + text(mesh.y(v)) + " " + text(mesh.z(v)) + "\n");
     }
     int part = -1;
     for (int t = 0; t < mesh.triangleCount(); t++) {
@@ -31,5 +47,22 @@ public final class ObjWriter {
       int third = mesh.corner(t, turned.test(t) ? 1 : 2) + 1;
       to.write("f " + first + " " + second + " " + third + "\n");
     }
+  }
+
+  /** The fewest digits that read back to the same double; the platform's may be too many. */
+  static String text(double value) {
+    String usual = Double.toString(value);
+    if (usual.length() < ENOUGH && !(Math.abs(value) < Double.MIN_NORMAL)) {
+      return usual.endsWith(".0") ? usual.substring(0, usual.length() - 2) : usual;
+    }
+    BigDecimal fewest = new BigDecimal(usual);
+    for (int digits = fewest.precision() - 1; digits > 0; digits--) {
+      BigDecimal fewer = fewest.round(new MathContext(digits, RoundingMode.HALF_EVEN));
+      if (fewer.doubleValue() != value) {
+        break;
+      }
+      fewest = fewer;
+    }
+    return value == 0 ? "0" : fewest.stripTrailingZeros().toString();
   }
 }

@@ -1,14 +1,17 @@
 package org.hullsum.mesh;
 
 import java.util.Arrays;
+import java.util.List;
+import java.util.function.IntToDoubleFunction;
 
 /**
  * Makes one vertex of vertices that lie within a length of one another.
  *
- * <p>In the order of the mesh, each vertex joins the nearest earlier one within the length that has
- * stayed itself, or else stays itself; so none moves farther than the length, and chains don't run
- * on. Those that stay are more than the length apart, so that only a few lie in a cell of a grid as
- * wide: linear in the number of vertices.
+ * <p>In the order of their coordinates, whatever their order in the mesh, each vertex joins the
+ * nearest earlier one within the length that has stayed itself, or else stays itself; so none moves
+ * farther than the length, and chains don't run on. Those that stay are more than the length apart,
+ * so that only a few lie in a cell of a grid as wide: beside the sorting, linear in the number of
+ * vertices.
  */
 public final class VertexMerger {
   private static final int NONE = -1;
@@ -54,15 +57,66 @@ public final class VertexMerger {
       throw new IllegalArgumentException("vertices can't be welded within " + length);
     }
     VertexMerger merger = new VertexMerger(mesh, length);
-    for (int v = 0; v < mesh.vertexCount(); v++) {
-      merger.place(v);
-    }
+    merger.placeAll();
     int lost = 0;
     for (int t = 0; t < mesh.triangleCount(); t++) {
       lost += merger.losesACorner(t) ? 1 : 0;
     }
     MeshWeld weld = new MeshWeld(length, merger.merged, merger.farthest, lost);
     return new Merged(mesh.withVertices(merger.stays), weld);
+  }
+
+  /** The vertex that stays for each, itself where it does. */
+  static int[] stays(TriangleMesh mesh, double length) {
+    VertexMerger merger = new VertexMerger(mesh, length);
+    merger.placeAll();
+    return merger.stays;
+  }
+
+  private void placeAll() {
+    for (int v : sorted(mesh)) {
+      place(v);
+    }
+  }
+
+  /**
+   * The vertices by x, then y, then z: sorted by z first, each time keeping the order of equals.
+   */
+  private static int[] sorted(TriangleMesh mesh) {
+    int[] order = new int[mesh.vertexCount()];
+    Arrays.setAll(order, v -> v);
+    for (IntToDoubleFunction axis : List.<IntToDoubleFunction>of(mesh::z, mesh::y, mesh::x)) {
+      double[] values = new double[order.length];
+      Arrays.setAll(values, axis);
+      Arrays.sort(values);
+      long[] keys = new long[order.length];
+      for (int i = 0; i < keys.length; i++) {
+        long rank = firstOf(values, axis.applyAsDouble(order[i]));
+        keys[i] = rank << Integer.SIZE | i;
+      }
+      Arrays.sort(keys);
+      int[] before = order;
+      order = new int[keys.length];
+      for (int i = 0; i < keys.length; i++) {
+        order[i] = before[(int) keys[i]];
+      }
+    }
+    return order;
+  }
+
+  /** Where a value first stands among sorted ones. */
+  private static int firstOf(double[] sorted, double value) {
+    int low = 0;
+    int high = sorted.length - 1;
+    while (low < high) {
+      int middle = (low + high) >>> 1;
+      if (sorted[middle] < value) {
+        low = middle + 1;
+      } else {
+        high = middle;
+      }
+    }
+    return low;
   }
 
   private void place(int v) {

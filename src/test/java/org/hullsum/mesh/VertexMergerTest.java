@@ -5,7 +5,12 @@ import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.util.ArrayList;
+import java.util.Collections;
+import java.util.HashSet;
+import java.util.List;
 import java.util.Random;
+import java.util.Set;
 import org.hullsum.numeric.Vector3;
 import org.junit.jupiter.api.Test;
 
@@ -85,5 +90,25 @@ class VertexMergerTest {
     TriangleMesh mesh = Meshes.of(Meshes.box(Vector3.ZERO, new Vector3(1, 1, 1)));
     assertThrows(IllegalArgumentException.class, () -> VertexMerger.merge(mesh, 0));
     assertThrows(IllegalArgumentException.class, () -> VertexMerger.merge(mesh, Double.NaN));
+  }
+
+  @Test
+  void whatIsWeldedDoesNotDependOnTheOrderOfTheMesh() {
+    Vector3[][] loose = shaken(Meshes.torus(2, 0.5, 30, 20), 7);
+    Set<Vector3> expected = Set.of();
+    for (long seed = 1; seed <= 10; seed++) {
+      List<Vector3[]> list = new ArrayList<>(List.of(loose));
+      Collections.shuffle(list, new Random(seed));
+      // Less than the triangles were shaken by, so that it matters who joins whom.
+      VertexMerger.Merged merged =
+          VertexMerger.merge(Meshes.of(list.toArray(new Vector3[0][])), JITTER / 2);
+      Set<Vector3> vertices = new HashSet<>();
+      for (int v = 0; v < merged.mesh().vertexCount(); v++) {
+        vertices.add(merged.mesh().vertex(v));
+      }
+      assertTrue(vertices.size() > 600 && vertices.size() < 3600, () -> "" + vertices.size());
+      assertEquals(seed == 1 ? vertices : expected, vertices);
+      expected = vertices;
+    }
   }
 }
