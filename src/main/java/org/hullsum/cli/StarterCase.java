@@ -5,31 +5,45 @@ import java.io.InputStream;
 import java.io.UncheckedIOException;
 import java.nio.charset.StandardCharsets;
 import java.util.Arrays;
-import java.util.Locale;
 import java.util.Optional;
 import java.util.Set;
 import java.util.stream.Collectors;
 
-/** The small, complete cases that {@code hullsum start} prints. */
+/** The small, complete cases that {@code hullsum start} prints, and the mesh that one needs. */
 enum StarterCase {
   /** A volume whose fluxes come from a formula. */
-  FIELD,
+  FIELD("field", ".yaml"),
   /** A volume whose fluxes are metered. */
-  METERED;
+  METERED("metered", ".yaml"),
+  /** A volume whose surface is a mesh. */
+  MESH("mesh", ".yaml"),
+  /** That mesh. */
+  MESH_FILE("mesh-file", ".obj");
 
-  private static final Set<String> NOT_YET = Set.of("network", "mesh", "traverse");
+  private static final Set<String> NOT_YET = Set.of("network", "traverse");
 
-  private String word() {
-    return name().toLowerCase(Locale.ROOT);
+  private final String word;
+  private final String ending;
+
+  StarterCase(String word, String ending) {
+    this.word = word;
+    this.ending = ending;
+  }
+
+  /** What it is called on the command line. */
+  String word() {
+    return word;
   }
 
   static Optional<StarterCase> of(String kind) {
-    return Arrays.stream(values()).filter(s -> s.word().equals(kind)).findFirst();
+    return Arrays.stream(values()).filter(s -> s.word.equals(kind)).findFirst();
   }
 
   /** The kinds that there are, in words. */
   static String kinds() {
-    return Arrays.stream(values()).map(StarterCase::word).collect(Collectors.joining(" or "));
+    String all = Arrays.stream(values()).map(StarterCase::word).collect(Collectors.joining(", "));
+    int last = all.lastIndexOf(", ");
+    return all.substring(0, last) + " or " + all.substring(last + 2);
   }
 
   /** Why there is no case of that kind. */
@@ -42,9 +56,9 @@ enum StarterCase {
         + kinds();
   }
 
-  /** The case file. */
+  /** The file. */
   String text() {
-    try (InputStream in = StarterCase.class.getResourceAsStream("start-" + word() + ".yaml")) {
+    try (InputStream in = StarterCase.class.getResourceAsStream("start-" + word + ending)) {
       return new String(in.readAllBytes(), StandardCharsets.UTF_8);
     } catch (IOException e) {
       throw new UncheckedIOException(e);

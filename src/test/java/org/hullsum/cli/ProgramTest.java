@@ -202,7 +202,6 @@ class ProgramTest {
         "audit x.yaml --json",
         "start",
         "start network",
-        "start mesh",
         "start traverse",
         "start nothing",
         "start field metered",
@@ -224,7 +223,7 @@ class ProgramTest {
 
   @Test
   void kindsThatAreNotSupportedYetAreSaidToBe() {
-    assertTrue(run("start", "mesh").err().contains("not supported"));
+    assertTrue(run("start", "network").err().contains("not supported"));
     assertFalse(run("start", "nothing").err().contains("not supported"));
   }
 
