@@ -188,7 +188,10 @@ final class CaseFindings {
         .forEach(name -> addOffered(surface, name));
     if (!surface.gaps().isEmpty()) {
       addOpen(surface);
-    } else if (surface.bare().isEmpty() && !surface.overlaps()) {
+      return;
+    }
+    WeldSuggestion.of(surface, scales).forEach(this::addCracked);
+    if (surface.bare().isEmpty() && !surface.overlaps()) {
       surface.undeterminedReason().ifPresent(reason -> addUndetermined(surface, reason));
     }
   }
@@ -271,6 +274,20 @@ final class CaseFindings {
     return patches.stream().map(p -> surface.patches().get(p).name()).toList();
   }
 
+  /** Of a mesh whose rims meet, but not vertex by vertex. */
+  private void addCracked(WeldSuggestion cracked) {
+    Patch patch = cracked.patch().patch();
+    add(
+        FindingCode.MESH_CRACKED,
+        "triangles of `"
+            + patch.name()
+            + "` meet along cracks, which stand in the error bounds; "
+            + cracked.text(),
+        patch.name(),
+        patch.facingPlace(),
+        Map.of("edges", cracked.open(), "weld", cracked.length()));
+  }
+
   private void addOpen(SurfaceAudit surface) {
     Map<String, Object> evidence = new LinkedHashMap<>();
     if (surface.determined()) {
@@ -289,9 +306,19 @@ final class CaseFindings {
             .collect(Collectors.joining("; "));
     String more =
         gaps.size() > MOST_GAPS_TOLD ? "; and " + (gaps.size() - MOST_GAPS_TOLD) + " more" : "";
+    List<WeldSuggestion> cracked = WeldSuggestion.of(surface, scales);
+    String welds = "";
+    if (!cracked.isEmpty()) {
+      evidence.put("weldOn", cracked.stream().map(w -> w.patch().name()).toList());
+      evidence.put("weld", cracked.stream().map(WeldSuggestion::length).toList());
+      welds =
+          cracked.stream()
+              .map(WeldSuggestion::text)
+              .collect(Collectors.joining("; ", ". Are these cracks? ", ""));
+    }
     add(
         FindingCode.SURFACE_OPEN,
-        surface.openReason().orElseThrow() + ": " + told + more + nearest(surface),
+        surface.openReason().orElseThrow() + ": " + told + more + nearest(surface) + welds,
         surface.volume().name(),
         surface.volume().place(),
         evidence);

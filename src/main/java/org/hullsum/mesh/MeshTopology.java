@@ -5,6 +5,7 @@ import java.util.BitSet;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Set;
+import java.util.stream.IntStream;
 
 /**
  * How the triangles of a mesh hang together: shells, holes, and which triangles face against the
@@ -227,6 +228,12 @@ public final class MeshTopology {
   /** Triangles with the same corners as an earlier one. */
   public int duplicateCount() {
     return duplicates;
+  }
+
+  /** The half-edges that have no other on their edge. */
+  IntStream boundary() {
+    return IntStream.range(0, 3 * mesh.triangleCount())
+        .filter(h -> pairing.mate(h) == EdgePairing.BOUNDARY);
   }
 
   /** Whether every shell is closed, and nothing crowded. */

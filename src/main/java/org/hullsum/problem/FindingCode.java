@@ -24,6 +24,7 @@ public enum FindingCode {
   TOO_COARSE_TO_TELL(Severity.WARNING),
   WAIVER_EXPIRED(Severity.WARNING),
   MESH_WELDED(Severity.NOTE),
+  MESH_CRACKED(Severity.NOTE),
   MESH_DEGENERATE_FACES(Severity.NOTE),
   FACETING_LOSS(Severity.NOTE),
   FLUX_UNKNOWN(Severity.NOTE),
