@@ -5,6 +5,7 @@ import java.util.BitSet;
 import java.util.HashSet;
 import java.util.List;
 import java.util.Set;
+import java.util.function.ToLongFunction;
 import java.util.stream.IntStream;
 
 /**
@@ -25,6 +26,13 @@ public final class MeshTopology {
 
   private final List<MeshShell> shells;
   private final List<MeshLoop> loops;
+
+  /**
+   * Triangles of closed shells that face against the others, and whether the others are to turn.
+   */
+  private final long closedAgainst;
+
+  private final boolean mostToTurn;
   private final int degenerate;
   private final int duplicates;
 
@@ -42,6 +50,10 @@ public final class MeshTopology {
     this.pairing = duplicates > 0 ? EdgePairing.of(mesh, leftOut, threads) : first;
     this.turned = new BitSet();
     this.shells = new ShellNesting(tree, findShells(leftOut), pairing).turnCavities(turned);
+    long closed = count(MeshShell::triangles);
+    long toTurn = count(MeshShell::toTurn);
+    this.closedAgainst = Math.min(toTurn, closed - toTurn);
+    this.mostToTurn = 2 * toTurn > closed;
     this.loops = new MeshLoops(mesh, pairing).loops();
   }
 
@@ -198,21 +210,17 @@ public final class MeshTopology {
    */
   public long againstCount() {
     long open = shells.stream().filter(s -> !s.bounds()).mapToLong(MeshShell::against).sum();
-    return open + Math.min(closedToTurn(), closedTriangles() - closedToTurn());
+    return open + closedAgainst;
   }
 
   /** Whether a triangle is one of {@link #againstCount}. */
   public boolean isAgainst(int triangle) {
-    boolean many = 2 * closedToTurn() > closedTriangles();
-    return turned.get(triangle) != (many && inClosed.get(triangle));
+    return turned.get(triangle) != (mostToTurn && inClosed.get(triangle));
   }
 
-  private long closedToTurn() {
-    return shells.stream().filter(MeshShell::bounds).mapToLong(MeshShell::toTurn).sum();
-  }
-
-  private long closedTriangles() {
-    return shells.stream().filter(MeshShell::bounds).mapToLong(MeshShell::triangles).sum();
+  /** A sum over the closed shells. */
+  private long count(ToLongFunction<MeshShell> what) {
+    return shells.stream().filter(MeshShell::bounds).mapToLong(what).sum();
   }
 
   /** Edges that more than two triangles share. */
