@@ -1,8 +1,12 @@
 package org.hullsum.closure;
 
 import java.util.ArrayList;
+import java.util.BitSet;
 import java.util.Comparator;
+import java.util.HashMap;
 import java.util.List;
+import java.util.Map;
+import java.util.Set;
 import java.util.TreeSet;
 import org.hullsum.numeric.Vector3;
 
@@ -22,6 +26,9 @@ final class GapTracer {
   /** A stretch as it is run through. */
   private record Step(Stretch stretch, boolean forward) {}
 
+  /** A step that may follow, with the number of its stretch. */
+  private record Choice(Step step, int number) {}
+
   /**
    * @param patchOf the patch of each rim
    * @param signs of the patches' construction normals, 0 where unknown
@@ -35,12 +42,60 @@ final class GapTracer {
   }
 
   List<Gap> gaps(List<Stretch> free) {
-    List<Stretch> left = new ArrayList<>(free);
+    Ends left = new Ends(free);
     List<Gap> gaps = new ArrayList<>();
-    while (!left.isEmpty()) {
-      gaps.add(trace(left));
+    for (int k = 0; k < free.size(); k++) {
+      if (left.take(k)) {
+        gaps.add(trace(free.get(k), left));
+      }
     }
     return gaps;
+  }
+
+  /** A cube as wide as two ends that are joined may lie apart. */
+  private record Cell(long x, long y, long z) {}
+
+  /** The stretches that are left, found by where they end. */
+  private final class Ends {
+    private final List<Stretch> all;
+    private final BitSet taken = new BitSet();
+    private final Map<Cell, List<Integer>> cells = new HashMap<>();
+
+    Ends(List<Stretch> all) {
+      this.all = all;
+      for (int k = 0; k < all.size(); k++) {
+        Step step = new Step(all.get(k), true);
+        for (boolean last : new boolean[] {false, true}) {
+          cells.computeIfAbsent(cell(end(step, last)), c -> new ArrayList<>()).add(k);
+        }
+      }
+    }
+
+    private Cell cell(Vector3 p) {
+      return new Cell(
+          (long) Math.floor(p.x() / joint),
+          (long) Math.floor(p.y() / joint),
+          (long) Math.floor(p.z() / joint));
+    }
+
+    /** Takes one out; false where that was done before. */
+    boolean take(int k) {
+      boolean left = !taken.get(k);
+      taken.set(k);
+      return left;
+    }
+
+    /** Those that may end near a point, in their order. */
+    Set<Integer> near(Vector3 p) {
+      Set<Integer> found = new TreeSet<>();
+      Cell middle = cell(p);
+      for (int n = 0; n < 27; n++) {
+        Cell cell =
+            new Cell(middle.x() + n % 3 - 1, middle.y() + n / 3 % 3 - 1, middle.z() + n / 9 - 1);
+        cells.getOrDefault(cell, List.of()).stream().filter(k -> !taken.get(k)).forEach(found::add);
+      }
+      return found;
+    }
   }
 
   private Vector3 end(Step step, boolean last) {
@@ -57,46 +112,46 @@ final class GapTracer {
     return signs[patchOf[stretch.rim()]] != 0;
   }
 
-  private Gap trace(List<Stretch> left) {
-    Stretch first = left.remove(0);
+  private Gap trace(Stretch first, Ends left) {
     List<Step> steps = new ArrayList<>();
     steps.add(new Step(first, forward(first)));
     Vector3 start = end(steps.get(0), false);
     boolean whole = false;
     // Each round uses up one stretch.
-    for (int round = left.size(); round >= 0 && !whole; round--) {
+    for (int round = left.all.size(); round >= 0 && !whole; round--) {
       Step last = steps.get(steps.size() - 1);
       whole = end(last, true).minus(start).norm() <= joint;
       if (!whole) {
-        List<Step> next = following(last, left);
+        List<Choice> next = following(last, left);
         if (next.isEmpty()) {
           break;
         }
-        steps.add(next.get(0));
-        left.remove(next.get(0).stretch());
+        steps.add(next.get(0).step());
+        left.take(next.get(0).number());
       }
     }
     return gap(steps, whole);
   }
 
   /** The stretches that go on from the end of a step, the best first. */
-  private List<Step> following(Step last, List<Stretch> left) {
+  private List<Choice> following(Step last, Ends left) {
     Vector3 end = end(last, true);
-    List<Step> next = new ArrayList<>();
-    for (Stretch stretch : left) {
+    List<Choice> next = new ArrayList<>();
+    for (int k : left.near(end)) {
+      Stretch stretch = left.all.get(k);
       for (boolean forward : new boolean[] {true, false}) {
         Step step = new Step(stretch, forward);
         boolean allowed =
             !isKnown(stretch) || !isKnown(last.stretch()) || forward == forward(stretch);
         if (allowed && end(step, false).minus(end).norm() <= joint) {
-          next.add(step);
+          next.add(new Choice(step, k));
         }
       }
     }
     int patch = patchOf[last.stretch().rim()];
     next.sort(
-        Comparator.comparingDouble((Step s) -> Math.rint(1e3 * turn(last, s)) / 1e3)
-            .thenComparing(s -> patchOf[s.stretch().rim()] == patch));
+        Comparator.comparingDouble((Choice c) -> Math.rint(1e3 * turn(last, c.step())) / 1e3)
+            .thenComparing(c -> patchOf[c.step().stretch().rim()] == patch));
     return next;
   }
 

@@ -11,6 +11,7 @@ import java.nio.file.Path;
 import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
+import java.util.Random;
 import java.util.regex.Matcher;
 import java.util.regex.Pattern;
 import org.hullsum.casefile.CaseReader;
@@ -91,6 +92,23 @@ class WeldSuggestionTest {
     Finding then = finding(SURFACE_OPEN, audit(open, weld(finding))).orElseThrow();
     assertTrue(!then.evidence().containsKey("weld"), then.message());
     assertWhole(audit(cracked(0.3, 80), weld(finding)));
+  }
+
+  @Test
+  void trianglesThatAllStandByThemselvesAreWeldedAsSuggested() throws IOException {
+    Random random = new Random(0x9E3779B97F4A7C15L);
+    Vector3[][] loose = Meshes.torus(2000, 500, 50, 30);
+    for (Vector3[] t : loose) {
+      Vector3 shift = new Vector3(random.nextDouble() - 0.5, 0, random.nextDouble() - 0.5);
+      for (int k = 0; k < 3; k++) {
+        t[k] = t[k].plus(shift.times(0.2));
+      }
+    }
+    CaseResult result = audit(loose, "");
+    Finding finding =
+        finding(SURFACE_OPEN, result).or(() -> finding(MESH_CRACKED, result)).orElseThrow();
+    assertTrue(finding.message().endsWith("would close all 9000 open edges"), finding.message());
+    assertWhole(audit(loose, weld(finding)));
   }
 
   @Test
