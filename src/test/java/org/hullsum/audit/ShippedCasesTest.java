@@ -46,6 +46,40 @@ class ShippedCasesTest {
   }
 
   @Test
+  void reversedMeterIsFirstAndLeavesTheOtherVolumeClosed() {
+    CaseResult result = audit(shipped("brine-manifold-reversed-meter"));
+    assertEquals(Verdict.IMBALANCED, balance(result, "manifold").verdict());
+    assertEquals(Verdict.BALANCED, balance(result, "collector").verdict());
+    Explanation first = result.explanations().get(0);
+    assertEquals(Kind.REVERSED, first.kind());
+    assertEquals(List.of("branch-2"), first.on());
+    assertTrue(first.fits() && first.tiedWith().isEmpty());
+    // A bias of the shared meter that closed the manifold would open the collector.
+    assertTrue(result.explanations().stream().noneMatch(e -> e.on().contains("crossover")));
+  }
+
+  @Test
+  void unitThatClosesTheDosingTankIsFirst() {
+    Explanation first = audit(shipped("dosing-skid-unit-slip")).explanations().get(0);
+    assertEquals(Kind.UNIT_SLIP, first.kind());
+    assertEquals(List.of("dilution-water"), first.on());
+    assertEquals(3.785411784, first.factor().orElseThrow(), 1e-9);
+    assertTrue(first.message().contains("[gal_us]/min"), first.message());
+    assertTrue(first.fits() && first.tiedWith().isEmpty());
+  }
+
+  @Test
+  void imbalanceThatTheMetersCouldNotShowIsWithinItsUncertainty() {
+    BalanceResult balance = only(audit(shipped("blowdown-looks-bad")));
+    assertEquals(Verdict.BALANCED, balance.verdict());
+    assertEquals(BalanceResult.Rule.UNCERTAINTY, balance.rule());
+    // Rectangular limits: u = a/sqrt(3) (JCGM 100:2008, 4.3.7).
+    double u = Math.sqrt((0.8 * 0.8 + 0.6 * 0.6 + 0.8 * 0.8 + 0.3 * 0.3) / 3);
+    assertEquals(u, balance.standardUncertainty(), 1e-12);
+    assertEquals(-0.9, balance.residual().orElseThrow(), 1e-12);
+  }
+
+  @Test
   void claimedInletFlowIsMissedThoughTheDuctBalances() {
     CaseResult result = audit(shipped("duct-claim"));
     assertEquals(Verdict.BALANCED, only(result).verdict());
