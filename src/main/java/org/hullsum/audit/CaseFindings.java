@@ -31,6 +31,9 @@ final class CaseFindings {
   /** Gaps that one message tells; the others are in the surface's own list. */
   private static final int MOST_GAPS_TOLD = 3;
 
+  /** Gaps that are held against one another. */
+  private static final int MOST_GAPS_COMPARED = 1000;
+
   /** Distance and difference of rims that may belong together, relative to their length. */
   private static final double ALIKE = 0.2;
 
@@ -326,7 +329,8 @@ final class CaseFindings {
 
   /** The two rims that most nearly fit, where they are so alike that one may be misplaced. */
   private String nearest(SurfaceAudit surface) {
-    List<Gap> gaps = surface.gaps();
+    List<Gap> all = surface.gaps();
+    List<Gap> gaps = all.subList(0, Math.min(all.size(), MOST_GAPS_COMPARED));
     String said = "";
     double least = ALIKE;
     for (int i = 0; i < gaps.size(); i++) {
