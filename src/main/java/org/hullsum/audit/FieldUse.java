@@ -106,6 +106,11 @@ final class FieldUse {
     }
 
     @Override
+    public Optional<List<VectorField>> traverse(FluxStatement.Traverse statement) {
+      return Optional.empty();
+    }
+
+    @Override
     public Optional<List<VectorField>> metered(FluxStatement.Metered statement) {
       return Optional.empty();
     }

@@ -28,6 +28,11 @@ final class NormalFollowing implements FluxStatement.Visitor<Boolean> {
   }
 
   @Override
+  public Boolean traverse(FluxStatement.Traverse statement) {
+    return true;
+  }
+
+  @Override
   public Boolean metered(FluxStatement.Metered statement) {
     return false;
   }

@@ -7,6 +7,9 @@ import org.hullsum.flux.FluxBasis;
 import org.hullsum.flux.PatchFlux;
 import org.hullsum.flux.PatchGeometry;
 import org.hullsum.model.Case;
+import org.hullsum.model.FluxStatement;
+import org.hullsum.model.StatedFlux;
+import org.hullsum.model.TraverseReadings;
 
 /** What is reported of each patch, in the units of the result. */
 final class PatchReport {
@@ -37,9 +40,21 @@ final class PatchReport {
             .filter(g -> audit.sign() != 0)
             .map(g -> scales.vectorArea(g.vectorArea().times(audit.sign()))),
         fluxes(audit),
+        traverses(audit),
         audit.patch().facing().text(),
         seen.found(),
         seen.reason());
+  }
+
+  /** Those whose facing can be told. */
+  private static List<TraverseReadings> traverses(PatchAudit audit) {
+    List<TraverseReadings> traverses = new ArrayList<>();
+    for (StatedFlux flux : audit.patch().fluxes()) {
+      if (flux.statement() instanceof FluxStatement.Traverse traverse && audit.sign() != 0) {
+        traverses.add(audit.sign() > 0 ? traverse.readings() : traverse.readings().reversed());
+      }
+    }
+    return traverses;
   }
 
   private List<PatchResult.Flux> fluxes(PatchAudit audit) {

@@ -4,6 +4,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Objects;
 import java.util.Optional;
+import org.hullsum.model.TraverseReadings;
 import org.hullsum.numeric.Vector3;
 
 /**
@@ -16,6 +17,7 @@ import org.hullsum.numeric.Vector3;
  * @param area in SI; empty without a surface
  * @param vectorArea ∬ n dS with the declared facing, in SI
  * @param fluxes at each instant
+ * @param traverses the readings of each traverse over it, along the declared normal
  * @param declaredFacing as the case has it
  * @param foundFacing empty without a surface or without a volume
  * @param facingReason why the facing is undetermined, or that it rests on winding numbers alone
@@ -28,6 +30,7 @@ public record PatchResult(
     Optional<Double> area,
     Optional<Vector3> vectorArea,
     List<Flux> fluxes,
+    List<TraverseReadings> traverses,
     String declaredFacing,
     Optional<FoundFacing> foundFacing,
     Optional<String> facingReason) {
@@ -55,7 +58,7 @@ public record PatchResult(
    * @param standardUncertainty from the measured figures
    * @param evaluations points at which the integrand was evaluated
    * @param basis how it is known: {@code field}, {@code flux-density}, {@code metered}, {@code
-   *     profile}, {@code none}, {@code unknown}
+   *     profile}, {@code traverse}, {@code none}, {@code unknown}
    */
   public record Flux(
       String quantity,
@@ -71,5 +74,6 @@ public record PatchResult(
     Objects.requireNonNull(name, "name");
     Objects.requireNonNull(declaredFacing, "declaredFacing");
     fluxes = List.copyOf(fluxes);
+    traverses = List.copyOf(traverses);
   }
 }

@@ -131,6 +131,11 @@ final class SingularityInspection {
     }
 
     @Override
+    public Boolean traverse(FluxStatement.Traverse statement) {
+      return false;
+    }
+
+    @Override
     public Boolean metered(FluxStatement.Metered statement) {
       return false;
     }

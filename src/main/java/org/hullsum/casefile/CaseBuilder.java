@@ -69,7 +69,7 @@ final class CaseBuilder {
             tolerances,
             top.placeOfKey("patches"));
     CorrelationReader correlations = new CorrelationReader(formulas);
-    FluxReader fluxes = new FluxReader(formulas, fields, measured, correlations, rates);
+    FluxReader fluxes = new FluxReader(formulas, fields, measured, correlations, files, rates);
     PatchReader patchReader =
         new PatchReader(formulas, files, fields, measured, fluxes, volumeReader, rates);
     List<Patch> patches = top.require("patches").map(patchReader::readAll).orElse(List.of());

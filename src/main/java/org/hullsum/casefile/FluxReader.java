@@ -14,7 +14,7 @@ import org.hullsum.units.Dimension;
 /** Reads how the flux through a patch is known. */
 final class FluxReader {
   private static final List<String> STATEMENTS =
-      List.of("field", "flux-density", "metered", "profile", "none", "unknown");
+      List.of("field", "flux-density", "metered", "profile", "traverse", "none", "unknown");
   private static final List<String> WORDS = List.of("none", "unknown");
 
   private final FormulaReader formulas;
@@ -24,6 +24,7 @@ final class FluxReader {
   private final MeasuredReader measured;
   private final DensityReader densities;
   private final ProfileReader profiles;
+  private final DataFiles files;
   private final CorrelationReader correlations;
   private final Rates rates;
 
@@ -32,6 +33,7 @@ final class FluxReader {
       FieldReader fields,
       MeasuredReader measured,
       CorrelationReader correlations,
+      DataFiles files,
       Rates rates) {
     this.formulas = formulas;
     this.values = formulas.values();
@@ -40,6 +42,7 @@ final class FluxReader {
     this.measured = measured;
     this.densities = new DensityReader(formulas);
     this.profiles = new ProfileReader(formulas, measured);
+    this.files = files;
     this.correlations = correlations;
     this.rates = rates;
   }
@@ -141,7 +144,8 @@ final class FluxReader {
 
   private Optional<FluxStatement> statement(
       MapReader map, String kind, Owner owner, Factor factor) {
-    if (List.of("field", "flux-density", "profile").contains(kind) && !owner.hasSurface()) {
+    if (List.of("field", "flux-density", "profile", "traverse").contains(kind)
+        && !owner.hasSurface()) {
       problems.add(
           ProblemKind.MISSING_KEY,
           map.placeOfKey(kind),
@@ -158,6 +162,12 @@ final class FluxReader {
       case "metered" -> map.get(kind).flatMap(v -> metered(v, map, owner.patch(), rate));
       case "profile" ->
           map.get(kind).flatMap(v -> profiles.read(v, owner.surface(), owner.patch(), perArea));
+      case "traverse" ->
+          map.get(kind)
+              .flatMap(
+                  v ->
+                      new TraverseReader(formulas, measured, files)
+                          .read(v, owner.surface(), owner.patch(), perArea));
       default -> word(map, kind);
     };
   }

@@ -44,7 +44,15 @@ final class ProfileReader {
     if (surface.isEmpty() || law.isEmpty() || speed.isEmpty()) {
       return Optional.empty();
     }
-    Optional<SurfaceEntry.Disk> disk = surface.get().disk().filter(SurfaceEntry.Disk::whole);
+    Optional<SurfaceEntry.Disk> disk =
+        surface
+            .get()
+            .disk()
+            .filter(SurfaceEntry.Disk::whole)
+            .or(() -> new MeshDisk(formulas).read(map, surface.get()).map(MeshDisk.Stated::disk));
+    if (disk.isEmpty() && surface.get().kind().equals("mesh")) {
+      return Optional.empty();
+    }
     if (disk.isEmpty()) {
       problems.add(
           ProblemKind.WRONG_VALUE,

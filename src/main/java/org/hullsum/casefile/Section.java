@@ -31,11 +31,19 @@ enum Section {
   FACING("`facing`", "along away-from", ""),
   FLUX(
       "`flux`",
-      "field flux-density unit metered fixed correlated-with profile none unknown times within",
-      "traverse facet-values carried-by content quantity"),
+      "field flux-density unit metered fixed correlated-with profile traverse none unknown times"
+          + " within",
+      "facet-values carried-by content quantity"),
   METERED("`metered`", "", "totaliser over file column time unit uncertainty between"),
-  PROFILE("`profile`", "power-law laminar uniform log-law centreline mean", "centre radius"),
+  PROFILE("`profile`", "power-law laminar uniform log-law centreline mean centre radius", ""),
   LOG_LAW("`log-law`", "roughness", ""),
+  TRAVERSE(
+      "`traverse`",
+      "rule readings speed yaw pitch components pressure at uncertainty rule-uncertainty centre"
+          + " radius",
+      ""),
+  TRAVERSE_PRESSURE("`pressure`", "column density coefficient", ""),
+  TRAVERSE_AT("`at`", "radius angle across up", ""),
   CLAIM("`claim`", "field", "quantity file"),
   TOLERANCES("`tolerances`", "absolute relative coverage", "quantity"),
   TIME("`time`", "from to steps", ""),

@@ -11,8 +11,13 @@ import org.hullsum.model.PatchSurface;
  * @param patchSurface empty where it can't be built because something was refused
  * @param kind the word of the format
  * @param disk what a velocity profile needs to know, for a disk in its place
+ * @param section what a traverse needs to know, for a whole disk or a rectangle without trim
  */
-record SurfaceEntry(Optional<PatchSurface> patchSurface, String kind, Optional<Disk> disk) {
+record SurfaceEntry(
+    Optional<PatchSurface> patchSurface,
+    String kind,
+    Optional<Disk> disk,
+    Optional<DuctSection> section) {
   /**
    * A disk.
    *

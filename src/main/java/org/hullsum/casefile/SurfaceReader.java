@@ -7,6 +7,7 @@ import org.hullsum.expression.VectorExpression;
 import org.hullsum.geometry.Body;
 import org.hullsum.geometry.DiskShape;
 import org.hullsum.geometry.Placement;
+import org.hullsum.geometry.RectangleShape;
 import org.hullsum.geometry.Shape;
 import org.hullsum.geometry.Surface;
 import org.hullsum.geometry.SurfaceFault;
@@ -77,7 +78,8 @@ final class SurfaceReader {
             build(new Plan(shape.get(), placement, trim), measures.get(), map)
                 .map(PatchSurface.Formulas::new),
             kind,
-            disk));
+            disk,
+            trim.isPresent() ? Optional.empty() : section(shape.get(), placement)));
   }
 
   private Optional<SurfaceEntry> mesh(Optional<MapReader> measures, MapReader map) {
@@ -90,7 +92,8 @@ final class SurfaceReader {
         return Optional.empty();
       }
     }
-    return measures.map(m -> new SurfaceEntry(meshes.read(m), "mesh", Optional.empty()));
+    return measures.map(
+        m -> new SurfaceEntry(meshes.read(m), "mesh", Optional.empty(), Optional.empty()));
   }
 
   private static Section section(String kind) {
@@ -159,6 +162,15 @@ final class SurfaceReader {
     VectorExpression centre =
         placement.isPresent() ? placement.get().placed(disk.centre()) : disk.centre();
     return new SurfaceEntry.Disk(centre, disk.radius(), disk.hole().isEmpty());
+  }
+
+  private Optional<DuctSection> section(Shape shape, Optional<Placement> placement) {
+    if (shape instanceof DiskShape disk && disk.hole().isEmpty() && disk.sector().isEmpty()) {
+      return DuctSection.of(disk, placement, parts.formulas());
+    }
+    return shape instanceof RectangleShape rectangle
+        ? DuctSection.of(rectangle, placement, parts.formulas())
+        : Optional.empty();
   }
 
   private Optional<Placement> placement(YamlValue value) {

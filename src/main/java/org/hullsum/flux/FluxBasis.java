@@ -7,6 +7,7 @@ public enum FluxBasis {
   FIELD(true),
   FLUX_DENSITY(true),
   PROFILE(true),
+  TRAVERSE(true),
   METERED(false),
   NONE(false),
   UNKNOWN(false);

@@ -154,6 +154,14 @@ public final class FluxIntegrator {
     }
 
     @Override
+    public PreparedFlux traverse(FluxStatement.Traverse statement) {
+      return new Constant(
+          PatchFlux.stated(
+                  inputs.evaluate(statement.rate(), OptionalDouble.empty()), FluxBasis.TRAVERSE)
+              .within(statement.errorBound()));
+    }
+
+    @Override
     public PreparedFlux metered(FluxStatement.Metered statement) {
       return new PreparedFlux() {
         @Override

@@ -52,6 +52,12 @@ public record PatchFlux(
         Optional.empty());
   }
 
+  /** The same with an error bound of its own. */
+  PatchFlux within(double bound) {
+    return new PatchFlux(
+        value, bound, magnitude, sensitivities, evaluations, status, basis, nonFiniteAt);
+  }
+
   /** A flux that nobody knows. */
   static PatchFlux unknown() {
     return new PatchFlux(

@@ -16,6 +16,8 @@ public sealed interface FluxStatement {
 
     R profile(Profile statement);
 
+    R traverse(Traverse statement);
+
     R none();
 
     R unknown();
@@ -80,6 +82,30 @@ public sealed interface FluxStatement {
     @Override
     public <R> R accept(Visitor<R> visitor) {
       return visitor.profile(this);
+    }
+  }
+
+  /**
+   * Point readings over a cross-section, along the normal.
+   *
+   * @param rate the mean of the readings by the rule, times the area: a formula of inputs
+   * @param errorBound of the rule's mean, times the area, in working units; 0 where the rule's
+   *     error is an input of the formula
+   * @param readings what went into it
+   */
+  record Traverse(Expression rate, double errorBound, TraverseReadings readings)
+      implements FluxStatement {
+    public Traverse {
+      Objects.requireNonNull(rate, "rate");
+      Objects.requireNonNull(readings, "readings");
+      if (!(errorBound >= 0)) {
+        throw new IllegalArgumentException("error bound " + errorBound);
+      }
+    }
+
+    @Override
+    public <R> R accept(Visitor<R> visitor) {
+      return visitor.traverse(this);
     }
   }
 

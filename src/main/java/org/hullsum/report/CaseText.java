@@ -49,6 +49,7 @@ final class CaseText {
     audited.about().ifPresent(a -> page.blank().paragraph(0, 0, a));
     byVolume().values().forEach(this::writeBalances);
     writeLonePatches();
+    TraversePlot.write(page, audited.patches());
     writeSurfaces();
     writeFindings();
     ExplanationText.write(page, audited);

@@ -8,6 +8,7 @@ import org.hullsum.audit.Explanation;
 import org.hullsum.audit.PatchResult;
 import org.hullsum.audit.PatchResult.FoundFacing;
 import org.hullsum.audit.SurfaceResult;
+import org.hullsum.model.TraverseReadings;
 
 /** The parts of the result document that carry the figures of a case. */
 final class JsonFigures {
@@ -124,11 +125,39 @@ final class JsonFigures {
         json.endObject();
       }
       json.endArray();
+      writeTraverses(json, patch.traverses());
       json.beginObject("facing");
       json.text("declared", patch.declaredFacing());
       json.optionalText("found", patch.foundFacing().map(FoundFacing::word));
       json.optionalText("reason", patch.facingReason());
       json.endObject();
+      json.endObject();
+    }
+    json.endArray();
+  }
+
+  private static void writeTraverses(JsonDocument json, List<TraverseReadings> traverses)
+      throws IOException {
+    json.beginArray("traverses");
+    for (TraverseReadings traverse : traverses) {
+      json.beginObject();
+      json.text("rule", traverse.rule());
+      json.text("section", traverse.round() ? "disk" : "rectangle");
+      json.text("unit", traverse.unit());
+      json.number("mean", traverse.mean());
+      json.number("largest", traverse.largest());
+      json.optionalNumber("largestToMean", traverse.largestToMean());
+      json.optionalNumber("variation", traverse.variation());
+      json.optionalNumber("swirl", traverse.swirl());
+      json.beginArray("readings");
+      for (TraverseReadings.Reading reading : traverse.readings()) {
+        json.beginObject();
+        json.numbers("at", List.of(reading.first(), reading.second()));
+        json.number("speed", reading.speed());
+        json.number("weight", reading.weight());
+        json.endObject();
+      }
+      json.endArray();
       json.endObject();
     }
     json.endArray();

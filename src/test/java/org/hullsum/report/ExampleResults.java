@@ -170,6 +170,7 @@ final class ExampleResults {
         List.of(
             new PatchResult.Flux(
                 "volume", "m3/s", Optional.empty(), Optional.of(-0.603), 2.5e-12, 0, 289, "field")),
+        List.of(),
         "as-drawn",
         Optional.of(found),
         found == PatchResult.FoundFacing.UNDETERMINED

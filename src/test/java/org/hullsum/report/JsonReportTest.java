@@ -115,7 +115,7 @@ class JsonReportTest {
       throws IOException {
     JsonNode c = everything().at("/cases/0");
     assertEquals(
-        List.of("name", "leaves", "enters", "area", "vectorArea", "fluxes", "facing"),
+        List.of("name", "leaves", "enters", "area", "vectorArea", "fluxes", "traverses", "facing"),
         keys(c.at("/patches/0")));
     assertEquals(
         List.of(
