@@ -77,7 +77,10 @@ final class Program {
                 + " inside.");
     root.addSubcommand("audit", withHelp(AuditOptionsReader.declare()));
     CommandSpec start = withHelp(CommandSpec.create());
-    start.usageMessage().description("Prints a small, complete case to begin from.");
+    start
+        .usageMessage()
+        .description(
+            "Prints a small, complete case to begin from, or where to read a duct's section.");
     start.addPositional(
         PositionalParamSpec.builder()
             .paramLabel("KIND")
@@ -86,6 +89,7 @@ final class Program {
             .type(String.class)
             .description(StarterCase.kinds() + ".")
             .build());
+    TraverseSheet.declare(start);
     root.addSubcommand("orient", orientCommand());
     root.addSubcommand("start", start);
     CommandSpec schema = withHelp(CommandSpec.create());
@@ -182,7 +186,7 @@ final class Program {
                   clock,
                   pipeline)
               .run();
-      case "start" -> start(command, parsed.matchedPositionalValue(0, ""));
+      case "start" -> start(command, parsed);
       default -> schema();
     };
   }
@@ -191,7 +195,13 @@ final class Program {
     return new AuditRun(request, out, err, clock, pipeline, terminal).run();
   }
 
-  private ExitCode start(CommandLine command, String kind) {
+  private ExitCode start(CommandLine command, ParseResult parsed) {
+    String kind = parsed.matchedPositionalValue(0, "");
+    if (kind.equals(TraverseSheet.KIND)) {
+      out.print(new TraverseSheet(command, parsed).text());
+      return ExitCode.FINE;
+    }
+    TraverseSheet.refuse(command, parsed);
     StarterCase starter =
         StarterCase.of(kind)
             .orElseThrow(() -> new ParameterException(command, StarterCase.refusal(kind)));

@@ -33,6 +33,7 @@ class ShippedCasesTest {
     "dosing-annulus, IDENTITY",
     "basin-and-sump, CONSERVATION",
     "brine-tank-metered, CONSERVATION",
+    "duct-junction-traverses, CONSERVATION",
     "tidal-basin, CONSERVATION"
   })
   void soundCaseIsBalancedWithoutFinding(String name, Check check) {
@@ -88,6 +89,27 @@ class ShippedCasesTest {
     double area = Math.PI * 0.25 * 0.25;
     assertEquals(
         5.0 * 49 / 60 * area, result.patches().get(0).fluxes().get(0).value().orElseThrow(), 1e-8);
+  }
+
+  /** Means computed beforehand by another program when the readings were invented. */
+  @Test
+  void traversesOfTheJunctionGiveTheMeansOfTheirReadings() {
+    CaseResult result = audit(shipped("duct-junction-traverses"));
+    PatchResult extract = result.patches().get(0);
+    PatchResult main = result.patches().get(2);
+    assertEquals(9.464261928383694, extract.traverses().get(0).mean(), 1e-12);
+    assertEquals(8.531659028019485, main.traverses().get(0).mean(), 1e-12);
+    assertEquals(3600 * 1.1893142298343913, extract.fluxes().get(0).value().orElseThrow(), 1e-8);
+    assertEquals("traverse", main.fluxes().get(0).basis());
+    assertEquals(
+        "main coefficient", only(result).budget().get(0).source(), result.balances().toString());
+    // Turned, the traverse's flux turns; the fan's, metered, does not.
+    CaseResult turned = audit(Audits.turned(shipped("duct-junction-traverses"), "main"));
+    assertEquals(-8.531659028019485, turned.patches().get(2).traverses().get(0).mean(), 1e-12);
+    assertEquals(
+        -main.fluxes().get(0).value().orElseThrow(),
+        turned.patches().get(2).fluxes().get(0).value().orElseThrow(),
+        1e-9);
   }
 
   @Test

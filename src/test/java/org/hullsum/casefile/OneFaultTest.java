@@ -154,12 +154,6 @@ class OneFaultTest {
             ProblemKind.NOT_SUPPORTED,
             "not supported yet"),
         fault(
-            "traverse",
-            "{profile: {power-law: 7, mean: 2.0 m/s}}",
-            "{¤traverse: {rule: gauss}}",
-            ProblemKind.NOT_SUPPORTED,
-            "not supported yet"),
-        fault(
             "facet values",
             "{profile: {power-law: 7, mean: 2.0 m/s}}",
             "{¤facet-values: {array: U}}",

@@ -67,6 +67,23 @@ class ProfileLawTest {
     assertEquals("power law, n = 7", law.text());
   }
 
+  /** Mean over centreline speed as fluid mechanics texts print it; from memory, 0.817 seen. */
+  @ParameterizedTest
+  @CsvSource({
+    "5, 0.758, 0.757576",
+    "6, 0.791, 0.791209",
+    "7, 0.817, 0.816667",
+    "8, 0.837, 0.836601",
+    "9, 0.853, 0.852632",
+    "10, 0.866, 0.865801"
+  })
+  void powerLawsHaveThePrintedRatios(double n, double printed, double computed) {
+    ProfileLaw law = ProfileLaw.power(DISK, Expression.number(n), "n");
+
+    assertEquals(printed, value(law.meanShare(), 0), 0.0005);
+    assertEquals(computed, value(law.meanShare(), 0), 5e-7);
+  }
+
   @ParameterizedTest
   @ValueSource(doubles = {1e-5, 3e-4, 0.01, 0.2})
   void logLawHasTheMeanOfItsShape(double roughness) {
