@@ -31,7 +31,7 @@ final class TraverseMatch {
    * @param weights one for each
    * @param error the largest relative error of the rule over power-law profiles
    */
-  record Weighed(double[] weights, double error) {}
+  record Weighed(List<Double> weights, double error) {}
 
   private final TraverseRule rule;
   private final DuctSection section;
@@ -58,6 +58,10 @@ final class TraverseMatch {
   /** Empty, and told, where the readings are not those of the rule. */
   Optional<Weighed> weigh() {
     return section.round() ? onRadii() : onGrid();
+  }
+
+  private static List<Double> boxed(double[] weights) {
+    return Arrays.stream(weights).boxed().toList();
   }
 
   private void refuse(Place place, String message) {
@@ -107,7 +111,7 @@ final class TraverseMatch {
       good &= place(radius, line, radii.size(), weights);
     }
     return good
-        ? Optional.of(new Weighed(weights, TraverseError.onRadius(line)))
+        ? Optional.of(new Weighed(boxed(weights), TraverseError.onRadius(line)))
         : Optional.empty();
   }
 
@@ -208,7 +212,7 @@ final class TraverseMatch {
   }
 
   /** The readings on the nearest points of a grid. */
-  private record Grid(TraverseLine across, TraverseLine up, int[] at, double worst) {
+  private record Grid(TraverseLine across, TraverseLine up, List<Integer> at, double worst) {
     int cells() {
       return across.size() * up.size();
     }
@@ -236,22 +240,22 @@ final class TraverseMatch {
     int[] taken = new int[grid.cells()];
     Arrays.fill(taken, -1);
     for (int i = 0; i < points.size(); i++) {
-      int first = grid.at()[i] % grid.across().size();
-      int second = grid.at()[i] / grid.across().size();
+      int first = grid.at().get(i) % grid.across().size();
+      int second = grid.at().get(i) / grid.across().size();
       weights[i] = grid.across().weights().get(first) * grid.up().weights().get(second);
       good &= stands(points.get(i), grid.across().positions().get(first), true);
       good &= stands(points.get(i), grid.up().positions().get(second), false);
-      if (taken[grid.at()[i]] >= 0 && good) {
+      if (taken[grid.at().get(i)] >= 0 && good) {
         refuse(
             points.get(i).place(),
             "two readings at one point of the rule; the other is at "
-                + points.get(taken[grid.at()[i]]).place());
+                + points.get(taken[grid.at().get(i)]).place());
         good = false;
       }
-      taken[grid.at()[i]] = i;
+      taken[grid.at().get(i)] = i;
     }
     return good && complete(grid, taken)
-        ? Optional.of(new Weighed(weights, TraverseError.onSides(grid.across(), grid.up())))
+        ? Optional.of(new Weighed(boxed(weights), TraverseError.onSides(grid.across(), grid.up())))
         : Optional.empty();
   }
 
@@ -326,7 +330,8 @@ final class TraverseMatch {
     }
     // Readings that share a point are no set of this grid, however near they stand to it.
     long distinct = Arrays.stream(at).distinct().count();
-    return new Grid(across, up, at, distinct < at.length ? worst + 1 : worst);
+    return new Grid(
+        across, up, Arrays.stream(at).boxed().toList(), distinct < at.length ? worst + 1 : worst);
   }
 
   private static int nearest(List<Double> positions, double at) {

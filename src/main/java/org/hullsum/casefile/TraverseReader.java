@@ -2,6 +2,7 @@ package org.hullsum.casefile;
 
 import java.nio.file.Path;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Optional;
 import java.util.stream.Stream;
@@ -104,7 +105,7 @@ final class TraverseReader {
    * @param error the largest relative error of a rule over power laws
    * @param interpolant of scattered readings, which bounds its error itself
    */
-  private record Weights(double[] shares, double error, Optional<ScatteredMean> interpolant) {}
+  private record Weights(List<Double> shares, double error, Optional<ScatteredMean> interpolant) {}
 
   private Optional<String> rule(YamlValue value) {
     List<String> words =
@@ -213,7 +214,9 @@ final class TraverseReader {
     }
     ScatteredMean.Outcome outcome = ScatteredMean.of(round, x, y);
     outcome.refusal().ifPresent(refusal -> refuse(subject, points, refusal));
-    return outcome.mean().map(m -> new Weights(m.weights(), 0, Optional.of(m)));
+    return outcome
+        .mean()
+        .map(m -> new Weights(Arrays.stream(m.weights()).boxed().toList(), 0, Optional.of(m)));
   }
 
   private void refuse(Subject subject, List<TraversePoint> points, ScatteredMean.Refusal refusal) {
@@ -282,7 +285,7 @@ final class TraverseReader {
               p.first(),
               subject.section().round() ? Math.toDegrees(p.second()) : p.second(),
               numbers[i] / speeds.size(),
-              weights.shares()[i]));
+              weights.shares().get(i)));
     }
     String source =
         TraverseRule.of(subject.rule())
@@ -301,10 +304,10 @@ final class TraverseReader {
                 speeds.swirl())));
   }
 
-  private static Expression mean(List<Expression> speeds, double[] shares) {
-    Expression sum = Expression.number(shares[0]).times(speeds.get(0));
-    for (int i = 1; i < shares.length; i++) {
-      sum = sum.plus(Expression.number(shares[i]).times(speeds.get(i)));
+  private static Expression mean(List<Expression> speeds, List<Double> shares) {
+    Expression sum = Expression.number(shares.get(0)).times(speeds.get(0));
+    for (int i = 1; i < shares.size(); i++) {
+      sum = sum.plus(Expression.number(shares.get(i)).times(speeds.get(i)));
     }
     return sum;
   }

@@ -78,12 +78,12 @@ final class TraverseSpeeds {
   }
 
   /**
-   * The kinds of columns, from which the speed along the normal is made.
+   * How speeds are told to people.
    *
-   * @param columns that have an uncertainty: one, or three components
-   * @param unit in which speeds are told, with its size in working units
+   * @param unit its code
+   * @param size in working units
    */
-  private record Told(List<ReadingsTable.Column> columns, String unit, double size) {}
+  private record Told(String unit, double size) {}
 
   /**
    * The speeds.
@@ -177,13 +177,13 @@ final class TraverseSpeeds {
   private Told told(List<ReadingsTable.Column> columns, boolean pressure) {
     WorkingUnits working = scope.working();
     if (working.none()) {
-      return new Told(columns, "1", 1);
+      return new Told("1", 1);
     }
     if (pressure || columns.get(0).unit().isEmpty()) {
-      return new Told(columns, "m/s", working.fromSi(1, SPEED));
+      return new Told("m/s", working.fromSi(1, SPEED));
     }
     Unit unit = columns.get(0).unit().get();
-    return new Told(columns, unit.code(), working.fromSi(unit.scale(), unit.dimension()));
+    return new Told(unit.code(), working.fromSi(unit.scale(), unit.dimension()));
   }
 
   private Optional<Line> angles(
